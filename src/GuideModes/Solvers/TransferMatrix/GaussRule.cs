@@ -2,11 +2,11 @@ using MathNet.Numerics.Integration;
 
 namespace GuideModes.Solvers.TransferMatrix;
 
-/// <summary>The nine Gauss–Legendre points of a step t ∈ [0, 1], and the fit through them by Legendre polynomials.</summary>
+/// <summary>The seven Gauss–Legendre points of a step t ∈ [0, 1], and the fit through them by Legendre polynomials.</summary>
 internal static class GaussRule
 {
     /// <summary>How many points; a fit has degree <see cref="Degree"/>.</summary>
-    public const int Points = 9;
+    public const int Points = 7;
 
     public const int Degree = Points - 1;
 

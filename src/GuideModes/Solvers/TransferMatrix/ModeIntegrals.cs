@@ -8,12 +8,12 @@ namespace GuideModes.Solvers.TransferMatrix;
 /// <remarks>
 /// n_g is dβ/dk by first-order perturbation (Hellmann–Feynman), with G = n² − (λ/2)∂n²/∂λ, the product of a material's index
 /// and group index. TE: n_g = ∫G u²/(n_eff ∫u²). TM: n_g = ∫{n²u² + (G − n²)[(u′ + ρu)² + β²u²]/(k²n²)}/(n_eff ∫u²), ρ = n′/n.
-/// Each step is integrated with the nine Gauss points its matrix was built from, at which the field is exact.
+/// Each step is integrated with the seven Gauss points its matrix was built from, at which the field is exact.
 /// </remarks>
 internal sealed class ModeIntegrals
 {
-    /// <summary>Steps whose power is this small a share of the largest add nothing.</summary>
-    private const double Negligible = -100;
+    /// <summary>Steps whose field squared is this small beside that at the match add nothing.</summary>
+    private const double Negligible = 1e-40;
 
     private readonly Sweep _sweep;
     private readonly Vector256<double>[] _nodes;
@@ -85,8 +85,8 @@ internal sealed class ModeIntegrals
         for (var i = 0; i < Mesh.Count; i++)
         {
             var (state, log) = field.At(i);
-            if (2 * log < Negligible) continue;
-            GatherStep(i, state, Math.Exp(2 * log), found.Energy, beta, sums);
+            var scale = Math.Exp(2 * log);
+            if (scale * state.Amplitude(found.Scale) > Negligible) GatherStep(i, state, scale, found.Energy, beta, sums);
         }
 
         GatherTail(0, Profile.Cover, field.At(0), Mesh.Joints[0].Backward, Mesh.Start[0], -_sweep.CoverDecay(found.Energy), beta, sums);

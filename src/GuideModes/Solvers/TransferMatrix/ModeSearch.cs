@@ -1,6 +1,6 @@
 namespace GuideModes.Solvers.TransferMatrix;
 
-/// <summary>Finds the energies E = −β² of the modes on one mesh: mode m is the one with m zeros.</summary>
+/// <summary>Finds the energies E = k²n_c² − β² of the modes on one mesh: mode m is the one with m zeros.</summary>
 /// <remarks>
 /// At a step's start the angles of the two decaying solutions, each counted on from its own end by whole turns of π at every
 /// zero, add up to Θ(E) + π; Θ grows with E at the rate s·∫u²/(s²u² + u′²), and Θ(E_m) = mπ. So a bracket for every mode is
@@ -20,15 +20,14 @@ internal sealed class ModeSearch
     private readonly double[] _logs;
     private double _scale = 1;
 
-    public ModeSearch(Sweep sweep, double lowest, double cutoff)
+    public ModeSearch(Sweep sweep, double lowest)
     {
         _sweep = sweep;
-        Count = sweep.CountBelow(cutoff);
+        Count = sweep.CountBelow(0);
         _low = new double[Count];
         _high = new double[Count];
         Array.Fill(_low, lowest);
-        Array.Fill(_high, cutoff);
-        _peak = Array.IndexOf(sweep.Mesh.Mean, sweep.Mesh.Mean.Min());
+                _peak = Array.IndexOf(sweep.Mesh.Mean, sweep.Mesh.Mean.Min());
         _logs = new double[sweep.Mesh.Count + 1];
     }
 
@@ -93,7 +92,7 @@ internal sealed class ModeSearch
             var residual = order * Math.PI - theta;
             step = residual / rate;
             var next = energy + step;
-            var resolution = 4 * double.Epsilon + 2.3e-16 * Math.Abs(energy);
+            var resolution = 2.3e-16 * Math.Abs(energy) + 1e-300;
             if (Math.Abs(step) <= resolution) return (next, Math.Abs(step));
             var slow = Math.Abs(residual) > 0.5 * last;
             if (!(next > _low[order] && next < _high[order]) || slow) next = 0.5 * (_low[order] + _high[order]);

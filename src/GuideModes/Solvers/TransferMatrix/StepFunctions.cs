@@ -15,13 +15,13 @@ namespace GuideModes.Solvers.TransferMatrix;
 internal static class StepFunctions
 {
     /// <summary>The highest index: η₀ … η_Top are produced.</summary>
-    public const int Top = 10;
+    public const int Top = 7;
 
     /// <summary>ξ, η₀ … η_Top: what <see cref="Evaluate"/> fills.</summary>
     public const int Count = Top + 2;
 
     private const double SeriesLimit = 4;
-    private const int SeriesTerms = 11;
+    private const int SeriesTerms = 12;
 
     private static readonly double[] TopSeries = Series(Top);
     private static readonly double[] NextSeries = Series(Top - 1);

@@ -7,16 +7,19 @@ namespace GuideModes.Solvers.TransferMatrix;
 /// mode costs one <see cref="StepFunctions.Evaluate"/> a step.
 /// </summary>
 /// <remarks>
-/// A step ends where its pieces end, and is no longer than <see cref="Radians"/> at any β a mode can have, in either
-/// sense: fewer than π, so that a field has at most one zero in it (Sturm), and growth that costs no digits.
+/// A step ends where its piece ends. At any β a mode can have it is no longer than <see cref="Radians"/>, fewer than π, so that
+/// a field has at most one zero in it (Sturm), and than <see cref="Nepers"/>, so that running against the growth costs few digits.
 /// </remarks>
 internal sealed class StepMesh
 {
     /// <summary>The number of coefficient vectors a step has.</summary>
     public const int Stride = StepSeries.Last + 2;
 
-    /// <summary>The longest step, in radians of phase or nepers of decay.</summary>
+    /// <summary>The longest step in radians of phase.</summary>
     public const double Radians = 3;
+
+    /// <summary>The longest step in nepers of decay: e⁶ε is 1e-13.</summary>
+    public const double Nepers = 6;
 
     private readonly double[] _legendre;
 
@@ -56,9 +59,9 @@ internal sealed class StepMesh
     /// <summary>What stands before each step, and after the last.</summary>
     public Joint[] Joints { get; }
 
-    public double CoverPotential => -Wavenumber2 * Problem.Profile.Cover.IndexSquared;
+    public double CoverPotential => Wavenumber2 * (Problem.Profile.CutoffIndexSquared - Problem.Profile.Cover.IndexSquared);
 
-    public double SubstratePotential => -Wavenumber2 * Problem.Profile.Substrate.IndexSquared;
+    public double SubstratePotential => Wavenumber2 * (Problem.Profile.CutoffIndexSquared - Problem.Profile.Substrate.IndexSquared);
 
     private double Wavenumber2 => Problem.Profile.Wavelength.Wavenumber * Problem.Profile.Wavelength.Wavenumber;
 

@@ -3,9 +3,9 @@ namespace GuideModes.Solvers.TransferMatrix;
 
 /// <summary>Where the steps lie: chosen so that each one's neglected terms stay below a tolerance for every mode at once.</summary>
 /// <remarks>
-/// Two terms are neglected in a step. The potential is replaced by its polynomial through nine Gauss points: what that leaves
+/// Two terms are neglected in a step. The potential is replaced by its polynomial through seven Gauss points: what that leaves
 /// out is orthogonal to all lower degrees, so that it meets only the matching component of u², which for a phase κh is at most
-/// j₈(κh) ≈ (κh)⁸/17!!. And the matrix series ends at <see cref="StepSeries.Last"/>. Both are held, as a change of the
+/// j₆(κh) ≈ (κh)⁶/13!!. And the matrix series ends at <see cref="StepSeries.Last"/>. Both are held, as a change of the
 /// potential, below tolerance: a mode's β² moves by no more than the mean of that change over its own power.
 /// </remarks>
 internal sealed class StepPlan
@@ -72,7 +72,7 @@ internal sealed class StepPlan
     public void Sample(Step step, Span<double> legendre)
     {
         var piece = _problem.Profile.Pieces[step.Piece];
-        var potential = new Potential(piece, _wavenumber, _problem.Polarization);
+        var potential = new Potential(piece, _problem);
         if (piece.IsUniform)
         {
             legendre.Clear();
@@ -92,7 +92,7 @@ internal sealed class StepPlan
         var spacing = _problem.Profile.Wavelength.Micrometres / 8;
         foreach (var piece in _problem.Profile.Pieces)
         {
-            var potential = new Potential(piece, _wavenumber, _problem.Polarization);
+            var potential = new Potential(piece, _problem);
             var extent = piece.Extent;
             var count = piece.IsUniform ? 1 : (int)Math.Clamp(Math.Ceiling(extent.Length / spacing), 16, 20_000);
             for (var i = 0; i <= count; i++)
@@ -143,10 +143,9 @@ internal sealed class StepPlan
         var h = step.End - step.Start;
         var variation = 0.0;
         for (var n = 1; n < GaussRule.Points; n++) variation += Math.Abs(legendre[n]);
-        var cutoff = -_wavenumber * _wavenumber * _problem.Profile.CutoffIndexSquared;
-        var fastest = Math.Sqrt(Math.Max(
-            Math.Max(cutoff - (legendre[0] - variation), legendre[0] + variation - LowestPotential), 1e-12));
-        var longest = StepMesh.Radians / fastest / h;
+        var phase = h * Math.Sqrt(Math.Max(variation - legendre[0], 0));
+        var decay = h * Math.Sqrt(Math.Max(legendre[0] + variation - LowestPotential, 0));
+        var longest = 1 / Math.Max(Math.Max(phase / StepMesh.Radians, decay / StepMesh.Nepers), 1e-9);
         if (longest < 1 || variation == 0) return longest * (1 - 1e-9);
         var calm = Math.Sqrt(LargestVariation / (h * h * variation));
         if (calm < 1) return 0.9 * calm;
@@ -155,15 +154,11 @@ internal sealed class StepPlan
         GaussRule.Monomials(legendre, monomials);
         for (var j = 0; j < monomials.Length; j++) monomials[j] *= h * h;
         series.Build(monomials);
-        var tail = (Math.Abs(legendre[GaussRule.Degree]) + Math.Abs(legendre[GaussRule.Degree - 1])) * Coupling(fastest * h);
+        var tail = (Math.Abs(legendre[GaussRule.Degree]) + Math.Abs(legendre[GaussRule.Degree - 1])) * Coupling(Math.Max(phase, decay));
         var error = tail + series.Remainder / (h * h);
-        return Math.Min(longest, 0.9 * Math.Pow(tolerance / Math.Max(error, 1e-300), 1.0 / 12));
+        return Math.Min(longest, 0.9 * Math.Pow(tolerance / Math.Max(error, 1e-300), 1.0 / 9));
     }
 
-    /// <summary>How much of u² a degree-8 wiggle can meet: (κh)⁸/17!!, and not below a thousandth, for the fit's own sake.</summary>
-    private static double Coupling(double phase)
-    {
-        var p2 = phase * phase;
-        return Math.Clamp(p2 * p2 * p2 * p2 / 34_459_425, 1e-6, 1);
-    }
+    /// <summary>How much of u² a degree-6 wiggle can meet: (κh)⁶/13!!, and not below a millionth, for the fit's own sake.</summary>
+    private static double Coupling(double phase) => Math.Clamp(phase * phase * phase * phase * phase * phase / 135_135, 1e-6, 1);
 }

@@ -20,8 +20,11 @@ internal sealed class StepSeries
     public const int Last = StepFunctions.Top - 1;
 
     private const int Terms = Last + 1;
-    private const int Degree = 24;
+    private const int Degree = 16;
     private const int Stride = Degree + 1;
+
+    /// <summary>Powers with smaller coefficients are dropped: the sums they enter are of order 1.</summary>
+    private const double Negligible = 1e-20;
 
     private static readonly double LastWeight = 1 / OddFactorial(2 * Last + 1);
 
@@ -44,7 +47,8 @@ internal sealed class StepSeries
         _secondDegree[0] = 0;
         Recur(_first, _firstDegree, d);
         Recur(_second, _secondDegree, d);
-        var last = Math.Abs(Value(_first, Last, 1)) + Math.Abs(Value(_second, Last, 1));
+        var last = Math.Abs(ValueAndSlope(_first, _firstDegree[Last], Last, 1).Value)
+            + Math.Abs(ValueAndSlope(_second, _secondDegree[Last], Last, 1).Value);
         Remainder = 2 * last * LastWeight;
     }
 
@@ -53,16 +57,19 @@ internal sealed class StepSeries
     /// </summary>
     public void Coefficients(double t, Span<Vector256<double>> into)
     {
-        var power = t;
-        into[0] = Vector256.Create(1, Value(_first, 0, t), 0, Value(_second, 0, t));
-        for (var m = 0; m <= Last; m++)
+        Span<double> powers = stackalloc double[Terms];
+        powers[0] = t;
+        for (var m = 1; m < Terms; m++) powers[m] = powers[m - 1] * t * t;
+        double nextU = 0, nextV = 0;
+        for (var m = Last; m >= 0; m--)
         {
             var (u, du) = ValueAndSlope(_first, _firstDegree[m], m, t);
             var (v, dv) = ValueAndSlope(_second, _secondDegree[m], m, t);
-            var (nextU, nextV) = m < Last ? (Value(_first, m + 1, t), Value(_second, m + 1, t)) : (0, 0);
-            into[m + 1] = Vector256.Create(u * power, (du + nextU * t) * power, v * power, (dv + nextV * t) * power);
-            power *= t * t;
+            into[m + 1] = powers[m] * Vector256.Create(u, du + nextU * t, v, dv + nextV * t);
+            (nextU, nextV) = (u, v);
         }
+
+        into[0] = Vector256.Create(1, nextU, 0, nextV);
     }
 
     /// <summary>The coefficients for a step of constant potential.</summary>
@@ -92,16 +99,9 @@ internal sealed class StepSeries
             for (var j = 0; j + 2 <= degree; j++) right[j] -= (j + 2) * (j + 1) * row[j + 2];
             var next = s.AsSpan((m + 1) * Stride, Stride);
             for (var j = 0; j <= top; j++) next[j] = 0.5 * right[j] / (j + m + 1);
+            while (top > 0 && Math.Abs(next[top]) < Negligible) top--;
             degrees[m + 1] = top;
         }
-    }
-
-    private double Value(double[] s, int m, double t)
-    {
-        var degree = ReferenceEquals(s, _first) ? _firstDegree[m] : _secondDegree[m];
-        var sum = 0.0;
-        for (var j = degree; j >= 0; j--) sum = sum * t + s[m * Stride + j];
-        return sum;
     }
 
     private static (double Value, double Slope) ValueAndSlope(double[] s, int degree, int m, double t)

@@ -2,7 +2,7 @@ using System.Runtime.Intrinsics;
 
 namespace GuideModes.Solvers.TransferMatrix;
 
-/// <summary>Carries the decaying solution of each end medium into the guide, at one energy E = −β².</summary>
+/// <summary>Carries the decaying solution of each end medium into the guide, at one energy E = k²n_c² − β².</summary>
 /// <remarks>
 /// Each step is one 2×2 matrix; ∫u² over it comes from the matrix and its derivative in E, by
 /// u′∂u/∂E − u∂u′/∂E = ∫u². Zeros are counted by sign, a step holding at most one. Not thread-safe: one sweep, one thread.

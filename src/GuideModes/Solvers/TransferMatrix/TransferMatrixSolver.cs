@@ -1,4 +1,5 @@
 using System.Collections.Immutable;
+using GuideModes.Profiles;
 
 namespace GuideModes.Solvers.TransferMatrix;
 
@@ -21,10 +22,8 @@ public sealed record TransferMatrixSolver(double IndexTolerance = 2e-13, int Max
         var plan = StepPlan.For(problem, IndexTolerance, cancellation);
         if (!plan.IsComplete) return new(problem, SearchOutcome.Unresolved, [], []);
         var coarse = new Sweep(new StepMesh(plan, problem));
-        var k = problem.Profile.Wavelength.Wavenumber;
-        var cutoff = Math.Min(coarse.Mesh.CoverPotential, coarse.Mesh.SubstratePotential);
-        if (plan.LowestPotential >= cutoff) return new(problem, SearchOutcome.Complete, [], []);
-        var search = new ModeSearch(coarse, plan.LowestPotential, cutoff);
+        if (plan.LowestPotential >= 0) return new(problem, SearchOutcome.Complete, [], []);
+        var search = new ModeSearch(coarse, plan.LowestPotential);
         if (search.Count > MaximumModes) return new(problem, SearchOutcome.TooManyModes, [], []);
         if (search.Count == 0) return new(problem, SearchOutcome.Complete, [], []);
 
@@ -38,19 +37,19 @@ public sealed record TransferMatrixSolver(double IndexTolerance = 2e-13, int Max
             cancellation.ThrowIfCancellationRequested();
             var found = all[m];
             var (energy, step) = ModeSearch.Polish(fine, m, found.Energy, 2 * found.Match, found.Scale);
-            modes.Add(integrals.Describe(m, found, Index(energy, step + found.Error, k, fine.Mesh.Count)));
+            modes.Add(integrals.Describe(m, found, Index(energy, step + found.Error, problem.Profile, fine.Mesh.Count)));
             tails.Add(found with { Energy = energy });
         }
 
         return new(problem, SearchOutcome.Complete, modes.MoveToImmutable(), tails.MoveToImmutable(), coarse.Mesh);
     }
 
-    /// <summary>n_eff from E = −β², with the two meshes' difference and a floor for what rounding does over many steps.</summary>
-    private static Estimate Index(double energy, double difference, double wavenumber, int steps)
+    /// <summary>n_eff from E, with the two meshes' difference and a floor for what rounding does over many steps.</summary>
+    private static Estimate Index(double energy, double difference, IndexProfile profile, int steps)
     {
-        var index = Math.Sqrt(-energy) / wavenumber;
-        var perEnergy = 1 / (2 * wavenumber * wavenumber * index);
+        var k = profile.Wavelength.Wavenumber;
+        var index = Math.Sqrt(profile.CutoffIndexSquared - energy / (k * k));
         var rounding = (8 + Math.Sqrt(steps)) * 2.3e-16 * index;
-        return new(index, difference * perEnergy + rounding);
+        return new(index, difference / (2 * k * k * index) + rounding);
     }
 }
