@@ -16,7 +16,7 @@ internal sealed class StepMesh
     public const int Stride = StepSeries.Last + 2;
 
     /// <summary>The longest step in radians of phase.</summary>
-    public const double Radians = 3;
+    public const double Radians = 2.0;
 
     /// <summary>The longest step in nepers of decay: e⁶ε is 1e-13.</summary>
     public const double Nepers = 6;
