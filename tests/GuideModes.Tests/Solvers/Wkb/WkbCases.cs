@@ -12,7 +12,7 @@ internal sealed class JetPiece(Interval extent, Func<Jet, Jet> indexSquared, Fun
 {
     public override double IndexSquared(double x) => fast is null ? Jet(x).Value : fast(x);
 
-    public override Jet Jet(double x) => indexSquared(Numerics.Jet.Coordinate(x));
+    public override Jet Jet(double x) => indexSquared(GuideModes.Numerics.Jet.Coordinate(x));
 }
 
 /// <summary>The planar guides of modes.json, built from their parameters, and the functions they need in jets.</summary>
