@@ -122,13 +122,13 @@ public sealed class ClosedFormTests
     }
 
     /// <summary>−u″ + x⁴u = Eu.</summary>
-    /// <remarks>n² = 81 − 0.06x⁴, x in µm and k² = 1/0.06, cut at |x| = 6, where n is 1.8 and a field of E = 50 has fallen below e^(−50).</remarks>
+    /// <remarks>n² = 81 − x⁴/8, x in µm and k² = 8, cut at |x| = 5, where n is 1.7 and the field of E = 50 has fallen to e^(−27).</remarks>
     [Fact]
     public void Quartic_Levels_AgreeWithTheTable()
     {
-        const double unit = 0.06;
-        var edge = Math.Sqrt(81 - unit * Math.Pow(6, 4));
-        var document = Planar(Math.Tau * Math.Sqrt(unit), Polarization.TE, 1, 1, Region(12, Power(9, edge, 6, 4, 6)));
+        const double unit = 0.125;
+        var edge = Math.Sqrt(81 - unit * Math.Pow(5, 4));
+        var document = Planar(Math.Tau * Math.Sqrt(unit), Polarization.TE, 1, 1, Region(10, Power(9, edge, 5, 4, 5)));
         var modes = Solve(document).Modes;
         foreach (var row in WorkedExamples.Root["wkb_quartic_and_exponential"]!["x4"]!.AsArray())
         {

@@ -48,16 +48,16 @@ public sealed class TransferMatrixSolution
         return new(xUm, values.MoveToImmutable());
     }
 
-    /// <summary>From u to the transverse field: 1 for E (TE), n for H (TM).</summary>
+    /// <summary>From u to the transverse field: 1 for E (TE), n for H (TM); at a joint, as u is there, of the right side.</summary>
     private double Factor(double x)
     {
         if (_problem.Polarization == Polarization.TE) return 1;
         var profile = _problem.Profile;
         if (x < profile.Extent.Start) return profile.Cover.Index;
-        if (x > profile.Extent.End) return profile.Substrate.Index;
+        if (x >= profile.Extent.End) return profile.Substrate.Index;
         foreach (var piece in profile.Pieces)
         {
-            if (x <= piece.Extent.End) return Math.Sqrt(piece.IndexSquared(x));
+            if (x < piece.Extent.End) return Math.Sqrt(piece.IndexSquared(x));
         }
 
         return profile.Substrate.Index;
