@@ -90,5 +90,11 @@ internal static class Documents
 
     public static TransferMatrixSolution Solve(GuideDocument document) => Solve(document, new());
 
-    public static TransferMatrixSolution Solve(GuideDocument document, TransferMatrixSolver solver) => solver.Solve(Problem(document));
+    /// <summary>The modes of a document's guide; the search must have ended well.</summary>
+    public static TransferMatrixSolution Solve(GuideDocument document, TransferMatrixSolver solver)
+    {
+        var solution = solver.Solve(Problem(document));
+        Assert.Equal(SearchOutcome.Complete, solution.Outcome);
+        return solution;
+    }
 }

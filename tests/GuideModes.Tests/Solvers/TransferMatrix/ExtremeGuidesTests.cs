@@ -46,7 +46,7 @@ public sealed class ExtremeGuidesTests
     [Fact]
     public void Solve_MoreModesThanAllowed_SaysSo()
     {
-        var solution = Solve(Planar(0.5, Polarization.TE, 1, 1, Region(1000, Uniform(3))));
+        var solution = new TransferMatrixSolver().Solve(Problem(Planar(0.5, Polarization.TE, 1, 1, Region(1000, Uniform(3)))));
 
         Assert.Equal(SearchOutcome.TooManyModes, solution.Outcome);
         Assert.Empty(solution.Modes);
@@ -97,6 +97,8 @@ public sealed class ExtremeGuidesTests
 
     /// <remarks>In TM the equation for u is singular at the centre for alpha &lt; 2; the shooting works on H and H′/n², which are not.</remarks>
     [Theory]
+    [InlineData(0.8, Polarization.TE)]
+    [InlineData(0.8, Polarization.TM)]
     [InlineData(1, Polarization.TE)]
     [InlineData(1, Polarization.TM)]
     [InlineData(1.2, Polarization.TE)]
@@ -113,7 +115,7 @@ public sealed class ExtremeGuidesTests
         {
             var index = mode.EffectiveIndex;
             var shot = Shooting.Index(problem, index.Value, [1]);
-            Deviation.Record($"power law, alpha {alpha}, {polarization}{mode.Order}", "shooting in the test", shot, index.Value, 1e-12);
+            Deviation.Record($"power law, alpha {alpha}, {polarization}{mode.Order}", "shooting in the test", shot, index.Value, 2e-11);
             Assert.True(Math.Abs(shot - index.Value) <= index.Error + 1e-13, $"{polarization}{mode.Order}: off by {shot - index.Value:E2}, bound {index.Error:E2}");
         }
     }
