@@ -21,7 +21,7 @@ public sealed class FuzzTests
     [Fact]
     public void Solve_WildGuides_NeverThrowsAndEnds()
     {
-        var (guided, refused, slowest) = (0, 0, TimeSpan.Zero);
+        var (guided, refused, slowest, slow) = (0, 0, TimeSpan.Zero, "");
         Property.Holds(
             Wild,
             guide =>
@@ -36,7 +36,7 @@ public sealed class FuzzTests
 
                 var watch = Stopwatch.StartNew();
                 var solution = new TransferMatrixSolver(MaximumModes: 200).Solve(new ModeProblem(read.Profile, read.Polarization));
-                if (watch.Elapsed > slowest) slowest = watch.Elapsed;
+                if (watch.Elapsed > slowest) (slowest, slow) = (watch.Elapsed, $"{solution.Outcome}, {solution.Modes.Length} modes of {guide}");
                 if (!solution.Modes.IsEmpty) guided++;
                 Assert.All(solution.Modes, mode => Assert.True(double.IsFinite(mode.EffectiveIndex.Error) && double.IsFinite(mode.GroupIndex), $"{mode}"));
             },
@@ -44,7 +44,7 @@ public sealed class FuzzTests
 
         Assert.InRange(guided, 50, 300);
         Assert.InRange(refused, 0, 150);
-        Assert.True(slowest < TimeSpan.FromSeconds(10), $"slowest {slowest}");
+        Assert.True(slowest < TimeSpan.FromSeconds(1), $"slowest {slowest}: {slow}");
     }
 
     private static RandomGuide Stretched(RandomGuide guide, double stretch, double wavelength, double cover, double substrate)

@@ -14,23 +14,29 @@ public sealed class WkbAgreementTests
         Gen.Select(RandomGuides.OneOf("gaussian", "sech2", "exponential", "erfc"), Gen.Double[3, 8], Gen.Double[1, 20]);
 
     [Fact]
-    public void FirstOrderIndex_VFourfold_ComesNearer() => Property.Holds(Cases, one => Compare(one, mode => mode.FirstOrderIndex));
+    public void FirstOrderIndex_VManyfold_ComesNearer() => Property.Holds(Cases, one => Compare(one, mode => mode.FirstOrderIndex));
 
     [Fact]
-    public void EffectiveIndex_VFourfold_ComesNearer() => Property.Holds(Cases, one => Compare(one, mode => mode.EffectiveIndex.Value));
+    public void EffectiveIndex_VManyfold_ComesNearer() => Property.Holds(Cases, one => Compare(one, mode => mode.EffectiveIndex.Value));
 
-    /// <remarks>One mode's deviation may pass through zero on the way; the largest of all modes must fall.</remarks>
+    /// <remarks>
+    /// One mode's deviation may pass through zero on the way; the largest of all modes must fall. A buried well is given four times its V.
+    /// A profile that starts at a cover is given sixteen times: its low modes sit in a nearly linear well, where b's error falls as
+    /// V^(−2/3) alone, and at small V the cover still takes part of it.
+    /// </remarks>
     private static void Compare((string Law, double V, double A) one, Func<WkbMode, double?> value)
     {
-        double small = Largest(one.Law, one.V, one.A, value), large = Largest(one.Law, 4 * one.V, one.A, value);
-        Assert.True(large <= small + Floor, $"largest deviation of b {small:E2} at V, {large:E2} at 4V");
+        var times = IsBuried(one.Law) ? 4 : 16;
+        double small = Largest(one.Law, one.V, one.A, value), large = Largest(one.Law, times * one.V, one.A, value);
+        Assert.True(large <= small + Floor, $"largest deviation of b {small:E2} at V, {large:E2} at {times}V");
     }
+
+    private static bool IsBuried(string law) => law is "gaussian" or "sech2";
 
     /// <summary>By how much b is off at most, among the modes that both engines have.</summary>
     private static double Largest(string law, double v, double a, Func<WkbMode, double?> value)
     {
-        var isBuried = law is "gaussian" or "sech2";
-        var guide = new NormalisedGuide(v, isBuried ? 0 : a);
+        var guide = new NormalisedGuide(v, IsBuried(law) ? 0 : a);
         var center = law == "gaussian" ? 7 : law == "sech2" ? 20 : 0;
         var document = guide.Document(Documents.Region(null, Documents.Diffused(law, guide.NBase, guide.DeltaN, 1, center, "n2")));
         var exact = Documents.Solve(document).Modes;
