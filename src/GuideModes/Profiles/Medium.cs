@@ -1,3 +1,5 @@
+using GuideModes.Numerics;
+
 namespace GuideModes.Profiles;
 
 /// <summary>A uniform medium at one wavelength.</summary>
@@ -9,4 +11,8 @@ public readonly record struct Medium(double IndexSquared, double GroupTerm)
 
     /// <summary>A medium without dispersion.</summary>
     public static Medium FromIndex(double index) => new(index * index, index * index);
+
+    /// <summary>A medium from n² with its derivative in the wavelength.</summary>
+    public static Medium From(Jet indexSquared, Wavelength wavelength) =>
+        new(indexSquared.Value, indexSquared.Value - 0.5 * wavelength.Micrometres * indexSquared.DLambda);
 }

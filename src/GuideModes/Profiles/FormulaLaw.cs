@@ -1,0 +1,100 @@
+using GuideModes.Numerics;
+
+namespace GuideModes.Profiles;
+
+/// <summary>n (or, with <see cref="GradedQuantity.IndexSquared"/>, n²) is a formula in x and lambda.</summary>
+/// <remarks>
+/// The region is cut where an abs, min or max changes branch, and each piece keeps its own branch up to its ends.
+/// Those places, and where a region to infinity may be cut, are found by sampling (evenly, by doubling distance and at every number in the formula)
+/// and bisection: two changes between neighbouring samples can be missed.
+/// </remarks>
+public sealed record FormulaLaw(GradedQuantity Quantity, Formula Formula) : IndexLaw
+{
+    /// <summary>How often a formula may change branch in one region.</summary>
+    public const int MaximumBranchChanges = 200;
+
+    private const int Samples = 2000;
+
+    public override double? Limit(Wavelength wavelength) => Index(FarAway, wavelength);
+
+    public override double? SettlesAt(double start, double furthest, Wavelength wavelength)
+    {
+        if (Limit(wavelength) is not { } limit || !double.IsFinite(limit)) return null;
+        bool IsSettled(double x) =>
+            Math.Abs(IndexSquared(x, wavelength) - limit * limit) <= DiffusedLaw.Settled * limit * limit;
+
+        var samples = TailSamples(start, furthest);
+        var lastUnsettled = Array.FindLastIndex(samples, x => !IsSettled(x));
+        if (lastUnsettled < 0) return start;
+        return lastUnsettled == samples.Length - 1
+            ? null
+            : Bisection.FirstTrue(IsSettled, samples[lastUnsettled], samples[lastUnsettled + 1]);
+    }
+
+    public override Fault? Misfit(Interval extent, bool isUnbounded, Wavelength wavelength) =>
+        BranchChanges(extent, wavelength).Count() > MaximumBranchChanges
+            ? new("n", $"The formula changes branch (abs, min, max) more than {MaximumBranchChanges} times in the region; at most {MaximumBranchChanges} are allowed.")
+            : null;
+
+    public override IEnumerable<SmoothPiece> Pieces(Interval extent, int region, Wavelength wavelength)
+    {
+        var lambda = wavelength.Micrometres;
+        if (Formula.Switches.IsEmpty) return [new FormulaPiece(extent, region, Quantity, Formula, lambda)];
+        var branches = new Dictionary<FormulaNode, Formula>();
+        return [.. extent.SplitAt(BranchChanges(extent, wavelength).Take(MaximumBranchChanges + 1)).Select(part =>
+            new FormulaPiece(part, region, Quantity, BranchAt(part.Middle, lambda, branches), lambda))];
+    }
+
+    internal override IEnumerable<double> Landmarks(Interval extent) => EvenSamples(extent);
+
+    /// <summary>The coordinate that stands for infinity: the furthest a region may reach.</summary>
+    private static double FarAway => 1e5;
+
+    private double Index(double x, Wavelength wavelength) => Math.Sqrt(IndexSquared(x, wavelength));
+
+    private double IndexSquared(double x, Wavelength wavelength) =>
+        Quantity.ToIndexSquared(Formula.Value(x, wavelength.Micrometres));
+
+    private Formula BranchAt(double x, double lambda, Dictionary<FormulaNode, Formula> known)
+    {
+        var branch = Formula.OnBranchOf(x, lambda);
+        if (known.TryGetValue(branch.Root, out var compiled)) return compiled;
+        known.Add(branch.Root, branch);
+        return branch;
+    }
+
+    private IEnumerable<double> BranchChanges(Interval extent, Wavelength wavelength)
+    {
+        var switches = Formula.Switches;
+        if (switches.IsEmpty) return [];
+        var samples = EvenSamples(extent);
+        return switches.SelectMany(node => SignChanges(x => node.Evaluate(x, wavelength.Micrometres), samples)).Order();
+    }
+
+    private static IEnumerable<double> SignChanges(Func<double, double> function, double[] samples)
+    {
+        var before = Sign(function(samples[0]));
+        for (var i = 1; i < samples.Length; i++)
+        {
+            var sign = Sign(function(samples[i]));
+            if (sign != before)
+                yield return Bisection.FirstTrue(x => Sign(function(x)) != before, samples[i - 1], samples[i]);
+            before = sign;
+        }
+    }
+
+    private static int Sign(double value) => value > 0 ? 1 : value < 0 ? -1 : 0;
+
+    private double[] EvenSamples(Interval extent) =>
+    [
+        .. Enumerable.Range(0, Samples + 1).Select(i => i == Samples ? extent.End : extent.Start + extent.Length * i / Samples)
+            .Concat(Formula.Numbers.Where(extent.Contains)).Distinct().Order(),
+    ];
+
+    private double[] TailSamples(double start, double furthest)
+    {
+        var even = Enumerable.Range(0, Samples).Select(i => start + 0.25 * i);
+        var doubling = Enumerable.Range(0, Samples).Select(i => start + (furthest - start) * Math.Pow(2, -17.0 * i / Samples));
+        return [.. even.Concat(doubling).Concat(Formula.Numbers).Where(x => x >= start && x <= furthest).Distinct().Order()];
+    }
+}
