@@ -7,7 +7,6 @@ using GuideModes.Guides;
 using GuideModes.Web.Components.Pages.Guides;
 using GuideModes.Web.Solving;
 using GuideModes.Web.State;
-using Microsoft.AspNetCore.Http.Json;
 using Microsoft.AspNetCore.Mvc;
 using Microsoft.Extensions.Options;
 
@@ -47,7 +46,7 @@ internal static class DownloadsApi
         [FromQuery(Name = "m")] string? M,
         GuideLinks Links,
         SolveService Solver,
-        IOptions<JsonOptions> Json,
+        IOptions<Microsoft.AspNetCore.Http.Json.JsonOptions> Json,
         HttpContext Context)
     {
         /// <summary>The modes asked for; null for all.</summary>

@@ -8,7 +8,7 @@ namespace GuideModes.Web.State;
 
 /// <summary>Guides too long for a link, kept as files named after their content.</summary>
 /// <remarks>The oldest give way once there are more than <see cref="Capacity"/>. Safe to share between threads.</remarks>
-internal sealed class DraftStore(IConfiguration configuration)
+public sealed class DraftStore(IConfiguration configuration)
 {
     public const int Capacity = 2000;
 

@@ -8,7 +8,7 @@ using GuideModes.Guides;
 namespace GuideModes.Web.State;
 
 /// <summary>A guide as the query of a link: <c>g=</c> the guide itself, deflated; <c>d=</c> the name of a saved draft.</summary>
-internal sealed class GuideLinks(DraftStore drafts)
+public sealed class GuideLinks(DraftStore drafts)
 {
     /// <summary>A longer <c>g</c> becomes a draft: browsers and servers differ in what they carry beyond this.</summary>
     public const int LongestInline = 6000;

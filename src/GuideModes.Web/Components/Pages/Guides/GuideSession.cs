@@ -7,7 +7,7 @@ using Microsoft.Extensions.Logging;
 namespace GuideModes.Web.Components.Pages.Guides;
 
 /// <summary>An answer, and the document it answers.</summary>
-internal sealed record SolvedGuide(GuideDocument Document, GuideAnswer Answer);
+public sealed record SolvedGuide(GuideDocument Document, GuideAnswer Answer);
 
 /// <summary>
 /// One person's guide at the bench: the document, how it came to be, its faults and its latest answer.
@@ -17,7 +17,7 @@ internal sealed record SolvedGuide(GuideDocument Document, GuideAnswer Answer);
 /// cancelled. <see cref="Latest"/> stays what it was until a new answer is there, and says which document it belongs to.
 /// <see cref="Changed"/> may come on any thread; everything else is called from one.
 /// </remarks>
-internal sealed class GuideSession(SolveService solver, ILogger<GuideSession> log) : IDisposable
+public sealed class GuideSession(SolveService solver, ILogger<GuideSession> log) : IDisposable
 {
     private const int LongestHistory = 500;
 
@@ -57,7 +57,19 @@ internal sealed class GuideSession(SolveService solver, ILogger<GuideSession> lo
     /// <summary>Makes a new document of the present one; one that changes nothing leaves no trace.</summary>
     public void Edit(Func<GuideDocument, GuideDocument> edit)
     {
-        var edited = edit(Document);
+        GuideDocument edited;
+        try
+        {
+            edited = edit(Document);
+        }
+        catch (Exception e) when (e is InvalidOperationException or ArgumentException)
+        {
+            // A document that came from elsewhere may hold, say, a number where a region should be.
+            Trouble = "This part of the document is not built as a guide document is; remove it, or put it right in the file.";
+            Changed?.Invoke();
+            return;
+        }
+
         if (edited.Equals(Document)) return;
         if (_past.Count == LongestHistory) _past.RemoveAt(0);
         _past.Add(Document);

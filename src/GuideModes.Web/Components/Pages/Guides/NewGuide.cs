@@ -4,7 +4,7 @@ using GuideModes.Guides;
 namespace GuideModes.Web.Components.Pages.Guides;
 
 /// <summary>What stands on the page before anyone has typed: one uniform film, so that nobody starts from nothing.</summary>
-internal static class NewGuide
+public static class NewGuide
 {
     public static GuideDocument Document { get; } = GuideDocument.Parse(
         """
