@@ -1,4 +1,5 @@
 using System.Text.Json;
+using GuideModes.Materials;
 using GuideModes.Numerics;
 using GuideModes.Profiles;
 
@@ -20,6 +21,7 @@ internal sealed class IndexReader(Wavelength? wavelength, FaultList faults)
     {
         if (value.ValueKind == JsonValueKind.Number) return range.Read(value, path, faults) is { } number ? new ConstantIndex(number) : null;
         if (ObjectReader.Open(value, path, expected, faults) is not { } fields) return null;
+        if (fields.Has("material") && range == GuideLimits.Index) return FromMaterial(fields);
         if (fields.Has("formula")) return FromFormula(fields, range);
         if (fields.Has("n")) return FromNumber(fields, range);
         faults.Add(path, $"Expected {expected}.");
@@ -30,6 +32,36 @@ internal sealed class IndexReader(Wavelength? wavelength, FaultList faults)
     {
         fields.RefuseUnknown(["n"]);
         return fields.Number("n", range) is { } number ? new ConstantIndex(number) : null;
+    }
+
+    private MaterialIndex? FromMaterial(ObjectReader fields)
+    {
+        var path = fields.At("material");
+        var id = Json.Text(fields.Find("material", "a material's name")!.Value);
+        if (id is null || MaterialCatalogue.Find(id) is not { } material)
+        {
+            faults.Add(path, $"This material is unknown; known are: {string.Join(", ", MaterialCatalogue.All)}.");
+            return null;
+        }
+
+        if (material.Variable is not { } variable)
+        {
+            fields.RefuseUnknown(["material"]);
+            return InRange(new(material, null), path);
+        }
+
+        fields.RefuseUnknown(["material", variable.Name]);
+        if (!fields.Has(variable.Name)) return InRange(new(material, variable.Default), path);
+        var range = new NumberRange(variable.Minimum, variable.Maximum, variable.Unit);
+        return fields.Number(variable.Name, range) is { } value ? InRange(new(material, value), path) : null;
+    }
+
+    private MaterialIndex? InRange(MaterialIndex index, string path)
+    {
+        var range = index.Material.RangeAt(index.Variable);
+        if (wavelength is not { } at || range.Contains(at)) return index;
+        faults.Add(path, $"{index.Material.Name} is known from {range}, but the wavelength is {at.Micrometres} µm.");
+        return null;
     }
 
     private FormulaIndex? FromFormula(ObjectReader fields, NumberRange range)

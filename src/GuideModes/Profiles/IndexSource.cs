@@ -1,3 +1,4 @@
+using GuideModes.Materials;
 using GuideModes.Numerics;
 
 namespace GuideModes.Profiles;
@@ -23,4 +24,10 @@ public sealed record ConstantIndex(double Index) : IndexSource
 public sealed record FormulaIndex(Formula Formula) : IndexSource
 {
     public override Jet At(Wavelength wavelength) => Formula.Jet(0, wavelength.Micrometres);
+}
+
+/// <summary>A material of the catalogue, with its composition or temperature where it has one.</summary>
+public sealed record MaterialIndex(Material Material, double? Variable) : IndexSource
+{
+    public override Jet At(Wavelength wavelength) => Material.Index(wavelength, Variable);
 }
