@@ -11,7 +11,8 @@ public sealed record DocumentEditor(GuideDocument Document, ImmutableArray<Fault
     public string? FaultAt(string path) => Join(Faults.Where(fault => fault.Path == path));
 
     /// <summary>The faults at a path and at anything below it.</summary>
-    public string? FaultWithin(string path) => Join(Faults.Where(fault => IsWithin(fault.Path, path)));
+    public string? FaultWithin(string path, string? except = null) =>
+        Join(Faults.Where(fault => IsWithin(fault.Path, path) && fault.Path != except));
 
     public void Set(string path, JsonNode? value) => Edit(document => document.With(path, value));
 

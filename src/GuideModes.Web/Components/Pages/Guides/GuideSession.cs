@@ -2,7 +2,6 @@ using System.Collections.Immutable;
 using GuideModes.Guides;
 using GuideModes.Solvers.Certification;
 using GuideModes.Web.Solving;
-using Microsoft.Extensions.Logging;
 
 namespace GuideModes.Web.Components.Pages.Guides;
 
