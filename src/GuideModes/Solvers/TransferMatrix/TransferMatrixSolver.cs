@@ -1,19 +1,55 @@
 using System.Collections.Immutable;
+using GuideModes.Profiles;
 
 namespace GuideModes.Solvers.TransferMatrix;
 
-/// <summary>The transfer-matrix answer: modes by decreasing n_eff.</summary>
-public sealed class TransferMatrixSolution
+/// <summary>The exact engine: every guided mode of a planar profile, by 2×2 transfer matrices.</summary>
+/// <remarks>
+/// Method: the profile is cut into steps; on each the matrix is exact for the polynomial that fits the potential there
+/// (<see cref="StepSeries"/>); the decaying solutions of the two end media are carried to where the mode is largest and joined
+/// by Newton's method on the sum of their Prüfer angles (<see cref="ModeSearch"/>). Everything is done twice, the second time
+/// with every step halved; the answer is the second, and its error the difference of the two and a floor for rounding.
+/// Limits: a feature much narrower than an eighth of the wavelength can be missed by both.
+/// </remarks>
+/// <param name="IndexTolerance">What a step of the coarser mesh may contribute to the error of n_eff.</param>
+/// <param name="MaximumModes">More modes than this are not looked for.</param>
+public sealed record TransferMatrixSolver(double IndexTolerance = 2e-13, int MaximumModes = 2000)
 {
-    public ImmutableArray<GuidedMode> Modes => throw new NotImplementedException();
+    /// <summary>Finds every guided mode.</summary>
+    /// <exception cref="OperationCanceledException">The caller lost interest.</exception>
+    public TransferMatrixSolution Solve(ModeProblem problem, CancellationToken cancellation = default)
+    {
+        var plan = StepPlan.For(problem, IndexTolerance, cancellation);
+        if (!plan.IsComplete) return new(problem, SearchOutcome.Unresolved, [], []);
+        var coarse = new Sweep(new StepMesh(plan, problem));
+        if (plan.LowestPotential >= 0) return new(problem, SearchOutcome.Complete, [], []);
+        var search = new ModeSearch(coarse, plan.LowestPotential);
+        if (search.Count > MaximumModes) return new(problem, SearchOutcome.TooManyModes, [], []);
+        if (search.Count == 0) return new(problem, SearchOutcome.Complete, [], []);
 
-    public SearchOutcome Outcome => throw new NotImplementedException();
+        var fine = new Sweep(new StepMesh(plan.Halved(), problem));
+        var integrals = new ModeIntegrals(coarse);
+        var modes = ImmutableArray.CreateBuilder<GuidedMode>(search.Count);
+        var tails = ImmutableArray.CreateBuilder<ModeSearch.Found>(search.Count);
+        var all = search.FindAll(cancellation);
+        for (var m = 0; m < all.Length; m++)
+        {
+            cancellation.ThrowIfCancellationRequested();
+            var found = all[m];
+            var (energy, step) = ModeSearch.Polish(fine, m, found.Energy, 2 * found.Match, found.Scale);
+            modes.Add(integrals.Describe(m, found, Index(energy, step + found.Error, problem.Profile, fine.Mesh.Count)));
+            tails.Add(found with { Energy = energy });
+        }
 
-    /// <summary>The field of mode m at ascending coordinates in µm, cover and substrate included.</summary>
-    public SampledField Field(int order, ImmutableArray<double> xUm) => throw new NotImplementedException();
-}
+        return new(problem, SearchOutcome.Complete, modes.MoveToImmutable(), tails.MoveToImmutable(), coarse.Mesh);
+    }
 
-public sealed record TransferMatrixSolver
-{
-    public TransferMatrixSolution Solve(ModeProblem problem, CancellationToken cancellation = default) => throw new NotImplementedException();
+    /// <summary>n_eff from E, with the two meshes' difference and a floor for what rounding does over many steps.</summary>
+    private static Estimate Index(double energy, double difference, IndexProfile profile, int steps)
+    {
+        var k = profile.Wavelength.Wavenumber;
+        var index = Math.Sqrt(profile.CutoffIndexSquared - energy / (k * k));
+        var rounding = (8 + Math.Sqrt(steps)) * 2.3e-16 * index;
+        return new(index, difference / (2 * k * k * index) + rounding);
+    }
 }

@@ -1,0 +1,4 @@
+using BenchmarkDotNet.Running;
+using GuideModes.Benchmarks;
+
+BenchmarkSwitcher.FromAssembly(typeof(PlanarBenchmarks).Assembly).Run(args);
