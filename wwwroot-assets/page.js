@@ -23,6 +23,7 @@ window.guideModesPage = (() => {
     },
     // Bytes, so that a long text leaves as a stream.
     textOf: (area) => DotNet.createJSStreamReference(new TextEncoder().encode(area.value)),
+    show: (id) => document.getElementById(id)?.scrollIntoView({ block: "start" }),
     copyAddress: () => navigator.clipboard.writeText(location.href),
   };
 })();

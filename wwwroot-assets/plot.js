@@ -33,7 +33,7 @@ function trace(curve, numbers, colour, kind) {
   const common = { type: "scatter", mode: "lines", x, y, name: curve.name, showlegend: false, hoverlabel: { namelength: -1 } };
   switch (curve.role) {
     case "profile":
-      return { ...common, line: { color: colour.profile, width: 2 }, hovertemplate: "x = %{x:.4f} µm<br>n = %{y:.6f}<extra></extra>" };
+      return { ...common, line: { color: colour.profile, width: 2 }, fill: "tozeroy", fillcolor: colour.fill, hovertemplate: "x = %{x:.4f} µm<br>n = %{y:.6f}<extra></extra>" };
     case "level":
       return { ...common, line: { color: own ?? colour.level, width: own ? 1.6 : 1.2, dash: own ? "solid" : "dot" }, hovertemplate: "%{fullData.name}<extra></extra>" };
     default:
@@ -55,7 +55,7 @@ function axis(title, range, colour, font) {
 }
 
 function notes(sheet, font, colour) {
-  return sheet.note ? [{ xref: "paper", yref: "paper", x: 0, y: 0, xanchor: "left", yanchor: "bottom", xshift: 4, text: sheet.note, showarrow: false, font: { ...font, size: 11, color: colour.soft } }] : [];
+  return sheet.note ? [{ xref: "paper", yref: "paper", x: 1, y: 0, xanchor: "right", yanchor: "bottom", xshift: -4, text: sheet.note, showarrow: false, font: { ...font, size: 11, color: colour.soft } }] : [];
 }
 
 function layout(sheet, colour, narrow) {
@@ -66,7 +66,7 @@ function layout(sheet, colour, narrow) {
     xaxis: axis(sheet.xTitle, sheet.xRange, colour, font), yaxis: axis(sheet.yTitle, sheet.yRange, colour, font),
     legend: { orientation: "h", y: 1.02, yanchor: "bottom", x: 0 },
     annotations: notes(sheet, font, colour).concat(sheet.labels.map((label) => ({
-      x: label.x, y: label.y, text: label.text, showarrow: false, xanchor: "left", yanchor: "middle", xshift: 4,
+      x: label.x, y: label.y, text: label.text, showarrow: false, xanchor: "left", yanchor: "bottom", xshift: 2, yshift: -1,
       font: { ...font, size: 11, color: label.slot >= 0 ? colour.series[label.slot % colour.series.length] : colour.soft },
     }))),
   };

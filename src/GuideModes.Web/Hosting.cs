@@ -51,4 +51,14 @@ internal static class Hosting
         headers["Referrer-Policy"] = "no-referrer";
         return next(context);
     });
+
+    /// <summary>An error without a body gets one: a problem document for programs, a page for people.</summary>
+    public static void UseFriendlyStatusPages(this WebApplication app)
+    {
+        app.UseWhen(IsForPrograms, programs => programs.UseStatusCodePages());
+        app.UseWhen(context => !IsForPrograms(context), people => people.UseStatusCodePagesWithReExecute("/not-found", createScopeForStatusCodePages: true));
+    }
+
+    private static bool IsForPrograms(HttpContext context) =>
+        context.Request.Path.StartsWithSegments("/api") || context.Request.Path.StartsWithSegments("/files");
 }

@@ -19,7 +19,8 @@ builder.Services.AddScoped<GuideSession>();
 
 var app = builder.Build();
 app.UseSafetyHeaders();
-app.UseStatusCodePagesWithReExecute("/not-found", createScopeForStatusCodePages: true);
+app.UseExceptionHandler();
+app.UseFriendlyStatusPages();
 app.UseAntiforgery();
 app.MapStaticAssets();
 app.MapOpenApi();

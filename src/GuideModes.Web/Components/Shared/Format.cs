@@ -49,9 +49,11 @@ public static class Format
         var percent = 100 * share;
         return percent switch
         {
+            0 => "0 %",
             > 0 and < 0.01 => "< 0.01 %",
+            100 => "100 %",
             > 99.99 and < 100 => "> 99.99 %",
-            _ => percent.ToString("0.##", CultureInfo.InvariantCulture) + " %",
+            _ => percent.ToString("F2", CultureInfo.InvariantCulture) + " %",
         };
     }
 

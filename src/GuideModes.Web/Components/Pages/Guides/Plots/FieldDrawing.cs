@@ -6,7 +6,7 @@ namespace GuideModes.Web.Components.Pages.Guides.Plots;
 /// <summary>The fields of chosen modes, or their squares.</summary>
 internal static class FieldDrawing
 {
-    private const int Points = 400;
+    private const int Points = 800;
 
     public static (PlotSheet Sheet, byte[] Numbers) Of(GuideAnswer answer, IReadOnlyList<int> chosen, bool intensity)
     {
@@ -24,7 +24,7 @@ internal static class FieldDrawing
 
         var margin = 0.08 * Math.Max(high - low, 1e-12);
         var name = answer.Guide.Polarization == Polarization.TE ? "E" : "H";
-        var title = intensity ? $"{name}² (µm⁻¹)" : $"{name} (µm^−½)";
+        var title = intensity ? $"{name}² (µm<sup>−1</sup>)" : $"{name} (µm<sup>−½</sup>)";
         var sheet = new PlotSheet("field", "x (µm)", title, [view.Start, view.End], [intensity ? 0 : low - margin, high + margin], packet.Curves, packet.Labels);
         return (sheet, packet.Bytes);
     }

@@ -7,10 +7,13 @@ namespace GuideModes.Web.Components.Pages.Guides.Plots;
 /// <summary>n(x), the effective indices as levels between their turning points, and chosen fields on their levels.</summary>
 internal static class ProfileDrawing
 {
-    private const int FieldPoints = 400;
+    private const int FieldPoints = 800;
 
     /// <summary>With more modes than this only the chosen ones are named beside their levels.</summary>
     private const int MostLabels = 12;
+
+    /// <summary>Names closer than this part of the index span would overlap.</summary>
+    private const double LabelHeight = 0.045;
 
     public static (PlotSheet Sheet, byte[] Numbers) Of(GuideAnswer answer, IReadOnlyList<int> chosen)
     {
@@ -29,11 +32,12 @@ internal static class ProfileDrawing
         var top = Math.Max(samples.Index.Max(), cutoff);
         var span = Math.Max(top - Math.Min(cutoff, samples.Index.Max()), 1e-6 * top);
         foreach (var mode in answer.Modes) AddLevel(packet, answer, mode, view, chosen);
-        AddFields(packet, answer, view, chosen, span);
+        AddLabels(packet, answer, chosen, span);
+        var highest = AddFields(packet, answer, view, chosen, span);
 
         var low = cutoff - 0.14 * span;
         var note = profile.Cover.Index < low ? $"cover n = {Format.Fixed(profile.Cover.Index, 4)}, below this window" : null;
-        var sheet = new PlotSheet("profile", "x (µm)", "index n, effective index", [view.Start, view.End], [low, top + 0.12 * span], packet.Curves, packet.Labels, note);
+        var sheet = new PlotSheet("profile", "x (µm)", "index n, effective index", [view.Start, view.End], [low, Math.Max(top + 0.12 * span, highest + 0.04 * span)], packet.Curves, packet.Labels, note);
         return (sheet, packet.Bytes);
     }
 
@@ -52,21 +56,49 @@ internal static class ProfileDrawing
         }
 
         packet.Add("level", $"{mode.Label}  n_eff = {Format.Bracketed(mode.Exact.EffectiveIndex)}", slot, x, y);
-        if (slot >= 0 || answer.Modes.Length <= MostLabels) packet.Labels.Add(new(mode.Label, turns[^1], n, slot));
     }
 
-    private static void AddFields(PlotPacket packet, GuideAnswer answer, Interval view, IReadOnlyList<int> chosen, double span)
+    /// <summary>Names stand at the right end of their levels; levels too close to be told apart share a line.</summary>
+    private static void AddLabels(PlotPacket packet, GuideAnswer answer, IReadOnlyList<int> chosen, double span)
     {
-        if (chosen.Count == 0) return;
+        List<CertifiedMode> together = [];
+        foreach (var mode in answer.Modes.Where(mode => answer.Modes.Length <= MostLabels || chosen.Contains(mode.Exact.Order)))
+        {
+            if (together.Count > 0 && Level(together[0]) - Level(mode) > LabelHeight * span) Flush();
+            together.Add(mode);
+        }
+
+        Flush();
+
+        void Flush()
+        {
+            if (together.Count == 0) return;
+            var end = together.Max(mode => mode.Wkb is { TurningPointsUm: [.., var last] } ? last : answer.Guide.Profile.Extent.Start);
+            packet.Labels.Add(new(string.Join(", ", together.Select(mode => mode.Label)), end, Level(together[0]), together.Max(mode => Slot(chosen, mode.Exact.Order))));
+            together.Clear();
+        }
+    }
+
+    private static double Level(CertifiedMode mode) => mode.Exact.EffectiveIndex.Value;
+
+    /// <summary>Draws the fields and says how high they reach.</summary>
+    private static double AddFields(PlotPacket packet, GuideAnswer answer, Interval view, IReadOnlyList<int> chosen, double span)
+    {
+        if (chosen.Count == 0) return 0;
         var grid = FieldGrid.Over(view, FieldPoints);
         var height = Height(answer, chosen, span);
+        var highest = 0.0;
         foreach (var order in chosen)
         {
             var field = answer.Field(order, grid);
             var largest = field.Value.Max(Math.Abs);
             var level = answer.Modes[order].Exact.EffectiveIndex.Value;
-            packet.Add("field", answer.Modes[order].Label, Slot(chosen, order), field.XUm, [.. field.Value.Select(value => level + height * value / largest)]);
+            double[] drawn = [.. field.Value.Select(value => level + height * value / largest)];
+            highest = Math.Max(highest, drawn.Max());
+            packet.Add("field", answer.Modes[order].Label, Slot(chosen, order), field.XUm, drawn);
         }
+
+        return highest;
     }
 
     /// <summary>Tall enough to be read, and where the levels allow it not into the next one.</summary>
