@@ -1,4 +1,5 @@
 using System.Linq.Expressions;
+using System.Reflection;
 
 namespace GuideModes.Numerics;
 
@@ -107,15 +108,18 @@ internal sealed record ArithmeticNode(char Operator, FormulaNode Left, FormulaNo
 
     public override Expression ToNumber(FormulaScope scope) => Combine(Left.ToNumber(scope), Right.ToNumber(scope));
 
-    public override Expression ToJet(FormulaScope scope) => Combine(Left.ToJet(scope), Right.ToJet(scope));
+    public override Expression ToJet(FormulaScope scope) =>
+        Combine(Left.ToJet(scope), Right.ToJet(scope), JetMethod(nameof(JetMath.Product)), JetMethod(nameof(JetMath.Quotient)));
 
-    private BinaryExpression Combine(Expression left, Expression right) => Operator switch
+    private BinaryExpression Combine(Expression left, Expression right, MethodInfo? product = null, MethodInfo? quotient = null) => Operator switch
     {
         '+' => Expression.Add(left, right),
         '-' => Expression.Subtract(left, right),
-        '*' => Expression.Multiply(left, right),
-        _ => Expression.Divide(left, right),
+        '*' => Expression.Multiply(left, right, product),
+        _ => Expression.Divide(left, right, quotient),
     };
+
+    private static MethodInfo JetMethod(string name) => typeof(JetMath).GetMethod(name, BindingFlags.Static | BindingFlags.NonPublic)!;
 }
 
 internal sealed record PowerNode(FormulaNode Base, FormulaNode Exponent) : FormulaNode

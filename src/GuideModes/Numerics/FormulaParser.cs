@@ -25,7 +25,7 @@ internal sealed class FormulaParser(string text, string? coordinate)
         if (text.Length > Formula.MaximumLength)
             throw Error(Formula.MaximumLength, $"A formula has at most {Formula.MaximumLength} characters; this one has {text.Length}");
         var node = Sum();
-        if (Peek() != '\0') throw Error(_at, $"Expected an operator or the end of the formula, but found '{Shown()}'");
+        if (!IsAtEnd()) throw Error(_at, $"Expected an operator or the end of the formula, but found '{Shown()}'");
         if (node.Size > Formula.MaximumSize) throw Error(0, $"The formula is too large: at most {Formula.MaximumSize} numbers, names and operators are allowed");
         return node;
     }
@@ -59,7 +59,7 @@ internal sealed class FormulaParser(string text, string? coordinate)
         var c = Peek();
         if (char.IsAsciiDigit(c) || c == '.') return Number();
         if (char.IsAsciiLetter(c)) return Named();
-        if (!Accept('(')) throw Error(_at, c == '\0' ? "The formula ends where a number, a name or '(' is expected" : $"Expected a number, a name or '(', but found '{Shown()}'");
+        if (!Accept('(')) throw Error(_at, IsAtEnd() ? "The formula ends where a number, a name or '(' is expected" : $"Expected a number, a name or '(', but found '{Shown()}'");
         var opened = _at;
         var inner = Sum();
         return Accept(')') ? inner : throw Error(_at, $"Expected ')' to close the '(' of column {opened}");
@@ -126,6 +126,12 @@ internal sealed class FormulaParser(string text, string? coordinate)
     {
         while (_at < text.Length && text[_at] is ' ' or '\t' or '\r' or '\n') _at++;
         return Here(0);
+    }
+
+    private bool IsAtEnd()
+    {
+        Peek();
+        return _at >= text.Length;
     }
 
     private char Here(int ahead) => _at + ahead < text.Length ? text[_at + ahead] : '\0';

@@ -1,58 +1,98 @@
 using System.Collections.Immutable;
+using System.Globalization;
 using GuideModes.Guides;
+using GuideModes.Profiles;
 using GuideModes.Solvers.TransferMatrix;
 using GuideModes.Solvers.Wkb;
 
 namespace GuideModes.Solvers.Certification;
 
-/// <summary>How well the two engines bear each other out.</summary>
-public enum Trust
-{
-    /// <summary>The asymptotic value lies within its own uncertainty of the exact one.</summary>
-    Agree,
-
-    /// <summary>Something deserves a look; the reason says what.</summary>
-    Watch,
-
-    /// <summary>The two engines contradict each other.</summary>
-    Disagree,
-}
-
-/// <summary>A mode that both engines have spoken on.</summary>
-/// <param name="Label">Such as TE0.</param>
-/// <param name="Exact">The transfer-matrix mode.</param>
-/// <param name="Wkb">The asymptotic mode of the same order; null where the WKB engine finds none.</param>
-/// <param name="Trust">The verdict.</param>
-/// <param name="Reason">The verdict's reason, in a sentence.</param>
-/// <param name="BetaPerUm">β = k₀·n_eff, rad/µm.</param>
-/// <param name="Remarks">Short machine-readable remarks, such as <c>near-cutoff</c>.</param>
-public sealed record CertifiedMode(
-    string Label,
-    GuidedMode Exact,
-    WkbMode? Wkb,
-    Trust Trust,
-    string Reason,
-    double BetaPerUm,
-    ImmutableArray<string> Remarks);
-
-/// <summary>Everything the product says of one guide.</summary>
+/// <summary>Everything the product says of one guide: both engines' modes, weighed against each other.</summary>
+/// <remarks>Immutable and safe to share between threads.</remarks>
 public sealed class GuideAnswer
 {
-    public Guide Guide => throw new NotImplementedException();
+    private readonly TransferMatrixSolution _exact;
+    private readonly ModeProblem _problem;
 
-    public ImmutableArray<CertifiedMode> Modes => throw new NotImplementedException();
+    private GuideAnswer(Guide guide, ModeProblem problem, TransferMatrixSolution exact, WkbSolution wkb)
+    {
+        Guide = guide;
+        _problem = problem;
+        _exact = exact;
+        WkbModeNumber = wkb.ModeNumberAtCutoff;
+        Outcome = exact.Outcome;
+        var verdict = new Verdict(guide.Profile, guide.Polarization, exact, wkb);
+        Modes = [.. exact.Modes.Select(verdict.On)];
+        Remarks = Sentences();
+    }
 
-    /// <summary>The WKB engine's continuous mode count at cutoff.</summary>
-    public double WkbModeNumber => throw new NotImplementedException();
+    public Guide Guide { get; }
+
+    /// <summary>The guided modes by decreasing n_eff.</summary>
+    public ImmutableArray<CertifiedMode> Modes { get; }
+
+    /// <summary>The WKB engine's continuous mode count at cutoff: 8.31 is eight modes and a third of a ninth.</summary>
+    public double WkbModeNumber { get; }
 
     /// <summary>Remarks on the guide as a whole: sentences.</summary>
-    public ImmutableArray<string> Remarks => throw new NotImplementedException();
+    public ImmutableArray<string> Remarks { get; }
 
-    public SearchOutcome Outcome => throw new NotImplementedException();
-
-    /// <summary>The exact field of mode m at ascending coordinates, µm.</summary>
-    public SampledField Field(int order, ImmutableArray<double> xUm) => throw new NotImplementedException();
+    /// <summary>Why the exact search ended.</summary>
+    public SearchOutcome Outcome { get; }
 
     /// <summary>Solves with both engines.</summary>
-    public static GuideAnswer Solve(Guide guide, CancellationToken cancellation = default) => throw new NotImplementedException();
+    /// <exception cref="OperationCanceledException">The caller lost interest.</exception>
+    public static GuideAnswer Solve(Guide guide, CancellationToken cancellation = default)
+    {
+        ArgumentNullException.ThrowIfNull(guide);
+        var problem = new ModeProblem(guide.Profile, guide.Polarization);
+        var wkb = new WkbSolver().Solve(problem, cancellation);
+        var exact = new TransferMatrixSolver().Solve(problem, cancellation);
+        return new(guide, problem, exact, wkb);
+    }
+
+    /// <summary>The exact field of mode m, µm^−½.</summary>
+    /// <param name="order">m, from 0.</param>
+    /// <param name="xUm">Coordinates, µm.</param>
+    /// <exception cref="ArgumentOutOfRangeException">There is no such mode.</exception>
+    public SampledField Field(int order, ImmutableArray<double> xUm) => _exact.Field(order, xUm);
+
+    /// <summary>The asymptotic field of mode m, µm^−½; null where the WKB engine finds no such mode.</summary>
+    public SampledField? WkbField(int order, ImmutableArray<double> xUm) =>
+        Modes[order].Wkb is { } mode ? new WkbSolver().Field(_problem, mode, xUm) : null;
+
+    private ImmutableArray<string> Sentences()
+    {
+        if (Outcome == SearchOutcome.TooManyModes)
+            return [Say($"The guide holds more than {new TransferMatrixSolver().MaximumModes} modes (about {WkbModeNumber:0} by WKB); the exact solver does not list so many.")];
+        if (Outcome == SearchOutcome.Unresolved)
+            return ["The profile has features too fine to resolve in the allowed number of steps; no mode is given rather than a doubtful one."];
+        if (Modes.IsEmpty) return [WhyNothingIsGuided()];
+        var whole = Math.Floor(WkbModeNumber);
+        return whole == Modes.Length
+            ? []
+            : [Say($"WKB counts {WkbModeNumber:0.00} modes, the exact zero count {Modes.Length}: the last one lies close to cutoff, where WKB may err by one.")];
+    }
+
+    private string WhyNothingIsGuided()
+    {
+        var profile = Guide.Profile;
+        var cutoff = Math.Sqrt(profile.CutoffIndexSquared);
+        var highest = Math.Sqrt(profile.Pieces.Max(Highest));
+        var medium = profile.Cover.IndexSquared > profile.Substrate.IndexSquared ? "cover" : "substrate";
+        return highest <= cutoff
+            ? Say($"Nothing is guided: the index reaches {highest:0.000000} at most, no more than that of the {medium}, {cutoff:0.000000}.")
+            : Say($"Nothing is guided: the raised index (up to {highest:0.000000} over {cutoff:0.000000} of the {medium}) is too weak or too thin at this wavelength; WKB counts {WkbModeNumber:0.00} of a mode.");
+    }
+
+    private static double Highest(SmoothPiece piece)
+    {
+        const int Samples = 256;
+        var highest = 0.0;
+        for (var i = 0; i <= Samples; i++)
+            highest = Math.Max(highest, piece.IndexSquared(piece.Extent.Start + piece.Extent.Length * i / Samples));
+        return highest;
+    }
+
+    private static string Say(FormattableString text) => text.ToString(CultureInfo.InvariantCulture);
 }
