@@ -15,7 +15,7 @@ public sealed record FieldRequest(ImmutableArray<double> XUm = default, IReadOnl
 /// <summary>Puts an answer into its wire shape: the one place where that is done, for the interface and for files.</summary>
 public static class AnswerBuilder
 {
-    private const int FieldPoints = 400;
+    private const int FieldPoints = 500;
 
     /// <summary>The program and its version, as it stands in every file and answer.</summary>
     public static string Engine { get; } =

@@ -49,12 +49,8 @@ public sealed class SolveService : IDisposable
 
     public void Dispose() => _places.Dispose();
 
-    private static GuideAnswer Checked(GuideAnswer answer) => answer.Outcome switch
-    {
-        SearchOutcome.TooManyModes => throw new WorkBudgetException(
-            "This guide holds more modes than the engines look for. A smaller thickness, a smaller index rise or a longer wavelength has fewer."),
-        SearchOutcome.Unresolved => throw new WorkBudgetException(
-            "The index profile changes faster somewhere than the engines can follow within their number of steps. A smoother profile can be solved."),
-        _ => answer,
-    };
+    /// <summary>An answer that had to stop short is told as too much work, in the engines' own sentence.</summary>
+    private static GuideAnswer Checked(GuideAnswer answer) => answer.Outcome == SearchOutcome.Complete
+        ? answer
+        : throw new WorkBudgetException(string.Join(' ', answer.Remarks));
 }

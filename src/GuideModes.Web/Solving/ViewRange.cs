@@ -35,7 +35,7 @@ internal static class ViewRange
             end = Math.Max(end, Finite(end + Tails * mode.SubstratePenetrationUm));
         }
 
-        return Limit(answer, start, end, 3);
+        return Limit(answer, start, end, 5);
     }
 
     /// <summary>From the cover to where the index has come within half a percent of its rise to the substrate's.</summary>

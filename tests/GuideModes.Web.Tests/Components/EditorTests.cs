@@ -92,11 +92,11 @@ public sealed class EditorTests : MudTestContext
     public void Fault_WhereverItStands_IsShown(string json)
     {
         _document = Samples.Document(json);
-        var text = Editor().Markup;
+        var text = System.Net.WebUtility.HtmlDecode(Editor().Markup);
 
         var faults = GuideReader.Read(_document).Faults;
         Assert.NotEmpty(faults);
-        foreach (var fault in faults) Assert.Contains(System.Net.WebUtility.HtmlEncode(fault.Message).Replace("&#39;", "'").Replace("&quot;", "\""), System.Net.WebUtility.HtmlDecode(text).Replace("&#39;", "'"));
+        foreach (var fault in faults) Assert.Contains(fault.Message, text);
     }
 
     [Fact]

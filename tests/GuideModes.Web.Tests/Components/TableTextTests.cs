@@ -16,7 +16,7 @@ public sealed class TableTextTests
         var table = TableText.Read(text);
 
         Assert.Empty(table.Faults);
-        Assert.Equal([new TablePoint(0, 1.5), new TablePoint(1, 1.49)], table.Points);
+        Assert.Equal([new TablePoint(0, 1.5), new TablePoint(1, 1.49)], table.Points.ToArray());
         Assert.True(table.IsUsable);
     }
 
