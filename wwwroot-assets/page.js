@@ -19,10 +19,18 @@ window.guideModesPage = (() => {
         clearTimeout(pause);
         pause = setTimeout(() => reference.invokeMethodAsync("TextChangedAsync"), 150);
       });
+      // The browser's own pasting takes seconds over thousands of lines; setting the text takes none.
+      area.addEventListener("paste", (event) => {
+        const text = event.clipboardData?.getData("text/plain");
+        if (!text) return;
+        event.preventDefault();
+        area.setRangeText(text, area.selectionStart, area.selectionEnd, "end");
+        area.dispatchEvent(new Event("input", { bubbles: true }));
+      });
       area.focus();
     },
     // Bytes, so that a long text leaves as a stream.
-    textOf: (area) => DotNet.createJSStreamReference(new TextEncoder().encode(area.value)),
+    textOf: (area) => new TextEncoder().encode(area.value),
     show: (id) => document.getElementById(id)?.scrollIntoView({ block: "start" }),
     copyAddress: () => navigator.clipboard.writeText(location.href),
   };

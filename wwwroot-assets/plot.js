@@ -3,6 +3,7 @@
 const library = new URL("_content/Plotly.Blazor/plotly-basic-3.7.0.min.js", document.baseURI).href;
 let loading = null;
 const drawn = new Map();
+const views = new Map(); // what a person zoomed to, kept over every later drawing
 
 function plotly() {
   if (window.Plotly) return Promise.resolve(window.Plotly);
@@ -58,12 +59,12 @@ function notes(sheet, font, colour) {
   return sheet.note ? [{ xref: "paper", yref: "paper", x: 1, y: 0, xanchor: "right", yanchor: "bottom", xshift: -4, text: sheet.note, showarrow: false, font: { ...font, size: 11, color: colour.soft } }] : [];
 }
 
-function layout(sheet, colour, narrow) {
+function layout(sheet, view, colour, narrow) {
   const font = { family: "Fira Sans, Segoe UI, system-ui, sans-serif", size: 12, color: colour.ink };
   return {
-    font, paper_bgcolor: "rgba(0,0,0,0)", plot_bgcolor: "rgba(0,0,0,0)", uirevision: "keep", hovermode: "closest",
+    font, paper_bgcolor: "rgba(0,0,0,0)", plot_bgcolor: "rgba(0,0,0,0)", hovermode: "closest",
     margin: { l: narrow ? 52 : 64, r: narrow ? 14 : 24, t: 10, b: 46 }, dragmode: "zoom",
-    xaxis: axis(sheet.xTitle, sheet.xRange, colour, font), yaxis: axis(sheet.yTitle, sheet.yRange, colour, font),
+    xaxis: axis(sheet.xTitle, view?.x ?? sheet.xRange, colour, font), yaxis: axis(sheet.yTitle, view?.y ?? sheet.yRange, colour, font),
     legend: { orientation: "h", y: 1.02, yanchor: "bottom", x: 0 },
     annotations: notes(sheet, font, colour).concat(sheet.labels.map((label) => ({
       x: label.x, y: label.y, text: label.text, showarrow: false, xanchor: "left", yanchor: "bottom", xshift: 2, yshift: -1,
@@ -80,8 +81,17 @@ async function render(id) {
   const colour = colours();
   const { sheet, numbers } = held;
   const traces = sheet.curves.map((curve) => trace(curve, numbers, colour, sheet.kind));
-  await library.react(canvas, traces, layout(sheet, colour, canvas.clientWidth < 480), { displayModeBar: false, responsive: true, scrollZoom: false });
+  await library.react(canvas, traces, layout(sheet, views.get(id), colour, canvas.clientWidth < 480), { displayModeBar: false, responsive: true, doubleClick: false });
+  if (!canvas.dataset.drawings) watch(canvas);
   canvas.dataset.drawings = String(Number(canvas.dataset.drawings ?? 0) + 1);
+}
+
+function watch(canvas) {
+  canvas.on("plotly_relayout", () => {
+    const { xaxis, yaxis } = canvas._fullLayout;
+    if (drawn.has(canvas.id)) views.set(canvas.id, { x: [...xaxis.range], y: [...yaxis.range] });
+  });
+  canvas.on("plotly_doubleclick", () => { zoom(canvas.id, 0); });
 }
 
 export function draw(id, sheet, bytes) {
@@ -91,6 +101,7 @@ export function draw(id, sheet, bytes) {
 
 export function forget(id) {
   drawn.delete(id);
+  views.delete(id);
   const canvas = document.getElementById(id);
   if (canvas && window.Plotly) window.Plotly.purge(canvas);
 }
@@ -100,10 +111,14 @@ export async function zoom(id, factor) {
   const held = drawn.get(id);
   const canvas = document.getElementById(id);
   if (!held || !canvas?._fullLayout) return;
+  if (factor === 0) {
+    views.delete(id);
+    await render(id);
+    return;
+  }
   const about = ([a, b]) => { const m = (a + b) / 2, h = (b - a) / 2 * factor; return [m - h, m + h]; };
-  const x = factor === 0 ? [...held.sheet.xRange] : about(canvas._fullLayout.xaxis.range.map(Number));
-  const y = factor === 0 ? [...held.sheet.yRange] : about(canvas._fullLayout.yaxis.range.map(Number));
-  await (await plotly()).relayout(canvas, { "xaxis.range": x, "yaxis.range": y });
+  const { xaxis, yaxis } = canvas._fullLayout;
+  await (await plotly()).relayout(canvas, { "xaxis.range": about(xaxis.range), "yaxis.range": about(yaxis.range) });
 }
 
 export async function save(id, format, filename) {
