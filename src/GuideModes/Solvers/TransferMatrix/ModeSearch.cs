@@ -10,6 +10,12 @@ internal sealed class ModeSearch
 {
     private const int MaximumSweeps = 200;
 
+    /// <summary>
+    /// Newton's next step would be smaller than this one by about the angle still missing, so that from here one step lands
+    /// within rounding.
+    /// </summary>
+    private const double LastAngle = 1e-7;
+
     /// <summary>The match moves when the mode is this much stronger elsewhere (as a logarithm of amplitude squared).</summary>
     private const double WorthMoving = 4;
 
@@ -66,6 +72,7 @@ internal sealed class ModeSearch
         var energy = Guess(order, guess);
         var match = _peak;
         var (found, error) = Solve(order, energy, match);
+        if (HasOneWell(found)) return new(found, error, match, _scale);
         var better = StrongestPoint(found, match);
         if (better == match) return new(found, error, match, _scale);
         var (refined, refinedError) = Solve(order, found, better);
@@ -93,7 +100,8 @@ internal sealed class ModeSearch
             step = residual / rate;
             var next = energy + step;
             var resolution = 2.3e-16 * Math.Abs(energy) + 1e-300;
-            if (Math.Abs(step) <= resolution) return (next, Math.Abs(step));
+            if (Math.Abs(step) <= resolution || Math.Abs(residual) < LastAngle)
+                return (next, Math.Abs(step * residual) + resolution);
             var slow = Math.Abs(residual) > 0.5 * last;
             if (!(next > _low[order] && next < _high[order]) || slow) next = 0.5 * (_low[order] + _high[order]);
             if (_high[order] - _low[order] <= 2 * resolution) return (next, _high[order] - _low[order]);
@@ -127,6 +135,20 @@ internal sealed class ModeSearch
     {
         var sign = value < 0 ? -1 : 1;
         return Math.Atan2(scale * Math.Abs(value), sign * slope);
+    }
+
+    /// <summary>True when the field oscillates in one stretch only, that of the highest index, where the match stands already.</summary>
+    private bool HasOneWell(double energy)
+    {
+        var stretches = 0;
+        var oscillates = false;
+        foreach (var mean in _sweep.Mesh.Mean)
+        {
+            if (mean < energy && !oscillates) stretches++;
+            oscillates = mean < energy;
+        }
+
+        return stretches <= 1;
     }
 
     /// <summary>The step start at which the mode is largest: where the product of the two decaying solutions is.</summary>
