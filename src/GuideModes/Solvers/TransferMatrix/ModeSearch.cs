@@ -11,8 +11,8 @@ internal sealed class ModeSearch
     private const int MaximumSweeps = 200;
 
     /// <summary>
-    /// Newton's next step would be smaller than this one by about the angle still missing, so that from here one step lands
-    /// within rounding.
+    /// In a single well Θ bends on the scale of a radian, so that Newton's next step is smaller than this one by about the angle
+    /// still missing, and from here one step lands within rounding. Between coupled wells Θ may bend within a splitting.
     /// </summary>
     private const double LastAngle = 1e-7;
 
@@ -33,7 +33,7 @@ internal sealed class ModeSearch
         _low = new double[Count];
         _high = new double[Count];
         Array.Fill(_low, lowest);
-                _peak = Array.IndexOf(sweep.Mesh.Mean, sweep.Mesh.Mean.Min());
+        _peak = Array.IndexOf(sweep.Mesh.Mean, sweep.Mesh.Mean.Min());
         _logs = new double[sweep.Mesh.Count + 1];
     }
 
@@ -89,6 +89,7 @@ internal sealed class ModeSearch
     private (double Energy, double Error) Solve(int order, double energy, int match)
     {
         var mean = _sweep.Mesh.Mean[match];
+        var lastAngle = HasOneWell(energy) ? LastAngle : 0;
         var last = double.PositiveInfinity;
         var step = double.PositiveInfinity;
         for (var i = 0; i < MaximumSweeps; i++)
@@ -100,7 +101,7 @@ internal sealed class ModeSearch
             step = residual / rate;
             var next = energy + step;
             var resolution = 2.3e-16 * Math.Abs(energy) + 1e-300;
-            if (Math.Abs(step) <= resolution || Math.Abs(residual) < LastAngle)
+            if (Math.Abs(step) <= resolution || Math.Abs(residual) < lastAngle)
                 return (next, Math.Abs(step * residual) + resolution);
             var slow = Math.Abs(residual) > 0.5 * last;
             if (!(next > _low[order] && next < _high[order]) || slow) next = 0.5 * (_low[order] + _high[order]);
