@@ -13,6 +13,9 @@ public sealed record FormulaLaw(GradedQuantity Quantity, Formula Formula) : Inde
     /// <summary>How often a formula may change branch in one region.</summary>
     public const int MaximumBranchChanges = 200;
 
+    /// <summary>How many abs, min and max a formula may have.</summary>
+    public const int MaximumSwitches = 20;
+
     private const int Samples = 2000;
 
     public override double? Limit(Wavelength wavelength) => Index(FarAway, wavelength);
@@ -31,10 +34,14 @@ public sealed record FormulaLaw(GradedQuantity Quantity, Formula Formula) : Inde
             : Bisection.FirstTrue(IsSettled, samples[lastUnsettled], samples[lastUnsettled + 1]);
     }
 
-    public override Fault? Misfit(Interval extent, bool isUnbounded, Wavelength wavelength) =>
-        BranchChanges(extent, wavelength).Count() > MaximumBranchChanges
+    public override Fault? Misfit(Interval extent, bool isUnbounded, Wavelength wavelength)
+    {
+        if (Formula.Switches.Length > MaximumSwitches)
+            return new("n", $"The formula has {Formula.Switches.Length} abs, min and max; at most {MaximumSwitches} are allowed.");
+        return BranchChanges(extent, wavelength).Count() > MaximumBranchChanges
             ? new("n", $"The formula changes branch (abs, min, max) more than {MaximumBranchChanges} times in the region; at most {MaximumBranchChanges} are allowed.")
             : null;
+    }
 
     public override IEnumerable<SmoothPiece> Pieces(Interval extent, int region, Wavelength wavelength)
     {
@@ -44,6 +51,8 @@ public sealed record FormulaLaw(GradedQuantity Quantity, Formula Formula) : Inde
         return [.. extent.SplitAt(BranchChanges(extent, wavelength).Take(MaximumBranchChanges + 1)).Select(part =>
             new FormulaPiece(part, region, Quantity, BranchAt(part.Middle, lambda, branches), lambda))];
     }
+
+    internal override int FormulaSize => Formula.Root.Size;
 
     internal override IEnumerable<double> Landmarks(Interval extent) => EvenSamples(extent);
 

@@ -1,4 +1,5 @@
 using System.Collections.Immutable;
+using System.Text.Json;
 using System.Text.Json.Nodes;
 using GuideModes.Guides;
 
@@ -174,13 +175,13 @@ public sealed class GuideReaderTest
     public void Read_ARootThatIsNoObject_IsAFaultOfTheDocument(string json) =>
         Assert.Equal("$", Assert.Single(Faults(GuideDocument.Parse(json))).Path);
 
-    [Fact]
-    public void Read_AFieldGivenTwice_IsAFault()
-    {
-        var fault = Assert.Single(Faults(GuideDocument.Parse(Valid.Replace("\"polarization\"", "\"name\": \"again\", \"polarization\"", StringComparison.Ordinal))));
-        Assert.Equal("name", fault.Path);
-        Assert.Contains("twice", fault.Message, StringComparison.Ordinal);
-    }
+    [Theory]
+    [InlineData("{ \"name\": \"a\", \"name\": \"b\" }")]
+    [InlineData("{ \"name\": \"\\ud800\" }")]
+    [InlineData("{ \"\\udfff\": 1 }")]
+    [InlineData("{ \"name\": }")]
+    [InlineData("")]
+    public void Parse_WhatNoDocumentCanHold_IsRefusedAsJson(string json) => Assert.ThrowsAny<JsonException>(() => GuideDocument.Parse(json));
 
     [Fact]
     public void Read_TooManyRegions_IsRefused()
@@ -218,6 +219,28 @@ public sealed class GuideReaderTest
         var fault = Assert.Single(Faults(document.With("regions", JsonNode.Parse($"[{Table(0)},{Table(1)},{Table(2)}]"))));
         Assert.Equal("regions", fault.Path);
         Assert.Contains("more than 10000 smooth pieces", fault.Message, StringComparison.Ordinal);
+    }
+
+    [Fact]
+    public void Read_FormulasTooLargeTogether_IsRefused()
+    {
+        var formula = string.Join("+", Enumerable.Repeat("x", 240)) + "-239*x";
+        var region = $"{{ \"thicknessUm\": 0.01, \"index\": {{ \"law\": \"formula\", \"n\": \"1.5+{formula}\" }} }}";
+        var document = GuideDocument.Parse(Valid).With("regions", JsonNode.Parse($"[{string.Join(",", Enumerable.Repeat(region, 12))}]"));
+
+        var fault = Faults(document)[0];
+        Assert.Equal("regions[10].index.n", fault.Path);
+        Assert.Contains("at most 5000", fault.Message, StringComparison.Ordinal);
+    }
+
+    [Fact]
+    public void Read_TooManyBranches_IsRefused()
+    {
+        var formula = "1.5+" + string.Join("+", Enumerable.Repeat("0*abs(x-1)", 21));
+        var fault = Assert.Single(Faults(GuideDocument.Parse(Valid).With("regions[0].index", JsonNode.Parse($"{{ \"law\": \"formula\", \"n\": \"{formula}\" }}"))));
+
+        Assert.Equal("regions[0].index.n", fault.Path);
+        Assert.Contains("has 21 abs, min and max; at most 20", fault.Message, StringComparison.Ordinal);
     }
 
     [Fact]
