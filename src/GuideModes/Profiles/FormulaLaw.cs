@@ -94,16 +94,28 @@ public sealed record FormulaLaw(GradedQuantity Quantity, Formula Formula) : Inde
 
     private static int Sign(double value) => value > 0 ? 1 : value < 0 ? -1 : 0;
 
-    private double[] EvenSamples(Interval extent) =>
-    [
-        .. Enumerable.Range(0, Samples + 1).Select(i => i == Samples ? extent.End : extent.Start + extent.Length * i / Samples)
-            .Concat(Formula.Numbers.Where(extent.Contains)).Distinct().Order(),
-    ];
+    private double[] EvenSamples(Interval extent)
+    {
+        var samples = new List<double>(Samples + 20);
+        for (var i = 0; i < Samples; i++) samples.Add(extent.Start + extent.Length * i / Samples);
+        samples.Add(extent.End);
+        return WithNumbers(samples, extent);
+    }
 
     private double[] TailSamples(double start, double furthest)
     {
-        var even = Enumerable.Range(0, Samples).Select(i => start + 0.25 * i);
-        var doubling = Enumerable.Range(0, Samples).Select(i => start + (furthest - start) * Math.Pow(2, -17.0 * i / Samples));
-        return [.. even.Concat(doubling).Concat(Formula.Numbers).Where(x => x >= start && x <= furthest).Distinct().Order()];
+        var samples = new List<double>(2 * Samples + 20);
+        var tail = new Interval(start, furthest);
+        for (var i = 0; i < Samples; i++) samples.Add(Math.Min(start + 0.25 * i, furthest));
+        for (var i = 0; i < Samples; i++) samples.Add(start + tail.Length * Math.Pow(2, -17.0 * i / Samples));
+        return WithNumbers(samples, tail);
+    }
+
+    /// <summary>With the numbers that stand in the formula, ascending: a feature is likely where a number points.</summary>
+    private double[] WithNumbers(List<double> samples, Interval extent)
+    {
+        samples.AddRange(Formula.Numbers.Where(extent.Contains));
+        samples.Sort();
+        return [.. samples];
     }
 }
