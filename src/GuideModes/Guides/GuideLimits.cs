@@ -34,6 +34,12 @@ public static class GuideLimits
     /// <summary>The most smooth pieces in one guide.</summary>
     public const int MostPieces = 10_000;
 
+    /// <summary>Numbers, names and operators in all formulas of a guide together.</summary>
+    public const int MostFormulaNodes = 5000;
+
+    /// <summary>The same, each formula counted once for every piece that its branches (abs, min, max) cut it into.</summary>
+    public const int MostCompiledNodes = 20_000;
+
     public const int LongestName = 200;
 
     public const int LongestNotes = 10_000;

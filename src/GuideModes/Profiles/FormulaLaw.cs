@@ -13,6 +13,9 @@ public sealed record FormulaLaw(GradedQuantity Quantity, Formula Formula) : Inde
     /// <summary>How often a formula may change branch in one region.</summary>
     public const int MaximumBranchChanges = 200;
 
+    /// <summary>How many abs, min and max a formula may have.</summary>
+    public const int MaximumSwitches = 20;
+
     private const int Samples = 2000;
 
     public override double? Limit(Wavelength wavelength) => Index(FarAway, wavelength);
@@ -31,10 +34,14 @@ public sealed record FormulaLaw(GradedQuantity Quantity, Formula Formula) : Inde
             : Bisection.FirstTrue(IsSettled, samples[lastUnsettled], samples[lastUnsettled + 1]);
     }
 
-    public override Fault? Misfit(Interval extent, bool isUnbounded, Wavelength wavelength) =>
-        BranchChanges(extent, wavelength).Count() > MaximumBranchChanges
+    public override Fault? Misfit(Interval extent, bool isUnbounded, Wavelength wavelength)
+    {
+        if (Formula.Switches.Length > MaximumSwitches)
+            return new("n", $"The formula has {Formula.Switches.Length} abs, min and max; at most {MaximumSwitches} are allowed.");
+        return BranchChanges(extent, wavelength).Count() > MaximumBranchChanges
             ? new("n", $"The formula changes branch (abs, min, max) more than {MaximumBranchChanges} times in the region; at most {MaximumBranchChanges} are allowed.")
             : null;
+    }
 
     public override IEnumerable<SmoothPiece> Pieces(Interval extent, int region, Wavelength wavelength)
     {
@@ -44,6 +51,8 @@ public sealed record FormulaLaw(GradedQuantity Quantity, Formula Formula) : Inde
         return [.. extent.SplitAt(BranchChanges(extent, wavelength).Take(MaximumBranchChanges + 1)).Select(part =>
             new FormulaPiece(part, region, Quantity, BranchAt(part.Middle, lambda, branches), lambda))];
     }
+
+    internal override int FormulaSize => Formula.Root.Size;
 
     internal override IEnumerable<double> Landmarks(Interval extent) => EvenSamples(extent);
 
@@ -85,16 +94,28 @@ public sealed record FormulaLaw(GradedQuantity Quantity, Formula Formula) : Inde
 
     private static int Sign(double value) => value > 0 ? 1 : value < 0 ? -1 : 0;
 
-    private double[] EvenSamples(Interval extent) =>
-    [
-        .. Enumerable.Range(0, Samples + 1).Select(i => i == Samples ? extent.End : extent.Start + extent.Length * i / Samples)
-            .Concat(Formula.Numbers.Where(extent.Contains)).Distinct().Order(),
-    ];
+    private double[] EvenSamples(Interval extent)
+    {
+        var samples = new List<double>(Samples + 20);
+        for (var i = 0; i < Samples; i++) samples.Add(extent.Start + extent.Length * i / Samples);
+        samples.Add(extent.End);
+        return WithNumbers(samples, extent);
+    }
 
     private double[] TailSamples(double start, double furthest)
     {
-        var even = Enumerable.Range(0, Samples).Select(i => start + 0.25 * i);
-        var doubling = Enumerable.Range(0, Samples).Select(i => start + (furthest - start) * Math.Pow(2, -17.0 * i / Samples));
-        return [.. even.Concat(doubling).Concat(Formula.Numbers).Where(x => x >= start && x <= furthest).Distinct().Order()];
+        var samples = new List<double>(2 * Samples + 20);
+        var tail = new Interval(start, furthest);
+        for (var i = 0; i < Samples; i++) samples.Add(Math.Min(start + 0.25 * i, furthest));
+        for (var i = 0; i < Samples; i++) samples.Add(start + tail.Length * Math.Pow(2, -17.0 * i / Samples));
+        return WithNumbers(samples, tail);
+    }
+
+    /// <summary>With the numbers that stand in the formula, ascending: a feature is likely where a number points.</summary>
+    private double[] WithNumbers(List<double> samples, Interval extent)
+    {
+        samples.AddRange(Formula.Numbers.Where(extent.Contains));
+        samples.Sort();
+        return [.. samples];
     }
 }

@@ -19,6 +19,9 @@ public abstract record IndexLaw
     /// <summary>What keeps the law from filling a stretch: the parameter at fault and a sentence; null if nothing does.</summary>
     public virtual Fault? Misfit(Interval extent, bool isUnbounded, Wavelength wavelength) => null;
 
+    /// <summary>How many formula nodes each piece of the law compiles; 0 for a law without formula.</summary>
+    internal virtual int FormulaSize => 0;
+
     /// <summary>Coordinates at which a check of the law on this stretch should look, beside an even sampling.</summary>
     internal virtual IEnumerable<double> Landmarks(Interval extent) => [];
 }
