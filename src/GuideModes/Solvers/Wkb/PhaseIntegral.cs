@@ -30,14 +30,19 @@ internal sealed class PhaseIntegral(ProfileMap map)
     private const double Tolerance = 1e-11;
     private const double CorrectionTolerance = 1e-9;
     private const int HighestLevel = 4;
+
+    // Stretches that one integral may try before it takes what it has: rounding may keep two orders from ever agreeing.
+    private const int ActionBudget = 1000, CorrectionBudget = 100;
     private const int DeepestHalving = 48;
     private int halfHint = 1;
     private int plainHint;
+    private int budget;
 
     /// <summary>The action over an arc of a well (sign +1), or of a barrier (sign −1), turning points where said.</summary>
     public Action Over(int piece, double level, double left, double right, bool leftTurning, bool rightTurning, double split, int sign = 1)
     {
         var p = map.Profile.Pieces[piece];
+        budget = ActionBudget;
         if (p.IsUniform) return Uniform(p.IndexSquared(left) - level, right - left, sign);
         if (leftTurning && rightTurning)
             return Half(p, level, split, left, sign, DeepestHalving) + Half(p, level, split, right, sign, DeepestHalving);
@@ -51,6 +56,7 @@ internal sealed class PhaseIntegral(ProfileMap map)
     {
         var p = map.Profile.Pieces[arc.Piece];
         if (p.IsUniform) return default;
+        budget = CorrectionBudget;
         if (arc.LeftTurning && arc.RightTurning)
         {
             return HalfCorrection(p, level, arc.Split, arc.Left, fourth, DeepestHalving)
@@ -72,12 +78,13 @@ internal sealed class PhaseIntegral(ProfileMap map)
     {
         var h = Math.Abs(turning - regular);
         if (h <= 4e-16 * Math.Abs(turning)) return default;
+        budget--;
         var last = HalfSum(HalfRangeRule.Ladder[halfHint], piece, level, regular, turning, sign);
         for (var k = halfHint + 1; k <= HighestLevel; k++)
         {
             var next = HalfSum(HalfRangeRule.Ladder[k], piece, level, regular, turning, sign);
             var change = Math.Abs(next.Root - last.Root);
-            if (change <= Tolerance * next.Root + Noise(level, next) || depth == 0)
+            if (change <= Tolerance * next.Root + Noise(level, next) || depth == 0 || budget < 0)
             {
                 halfHint = change <= 1e-4 * Tolerance * next.Root && halfHint > 0 ? halfHint - 1 : k - 1;
                 return next;
@@ -96,12 +103,13 @@ internal sealed class PhaseIntegral(ProfileMap map)
     {
         var h = right - left;
         if (h <= 0) return default;
+        budget--;
         var last = PlainSum(HalfRangeRule.Ladder[plainHint], piece, level, left, h, sign);
         for (var k = plainHint + 1; k <= HighestLevel; k++)
         {
             var next = PlainSum(HalfRangeRule.Ladder[k], piece, level, left, h, sign);
             var change = Math.Abs(next.Root - last.Root);
-            if (change <= Tolerance * next.Root + Noise(level, next) || depth == 0)
+            if (change <= Tolerance * next.Root + Noise(level, next) || depth == 0 || budget < 0)
             {
                 plainHint = change <= 1e-4 * Tolerance * next.Root && plainHint > 0 ? plainHint - 1 : k - 1;
                 return next;
@@ -150,11 +158,12 @@ internal sealed class PhaseIntegral(ProfileMap map)
 
     private Correction HalfCorrection(SmoothPiece piece, double level, double regular, double turning, bool fourth, int depth)
     {
+        budget--;
         var last = HalfCorrectionSum(HalfRangeRule.Ladder[1], piece, level, regular, turning, fourth);
         for (var k = 2; k <= HighestLevel; k++)
         {
             var next = HalfCorrectionSum(HalfRangeRule.Ladder[k], piece, level, regular, turning, fourth);
-            if (Settled(last, next) || depth == 0) return next;
+            if (Settled(last, next) || depth == 0 || budget < 0) return next;
             last = next;
         }
 
@@ -169,11 +178,12 @@ internal sealed class PhaseIntegral(ProfileMap map)
 
     private Correction PlainCorrection(SmoothPiece piece, double level, double left, double right, int depth, bool fourth = false)
     {
+        budget--;
         var last = PlainCorrectionSum(HalfRangeRule.Ladder[0], piece, level, left, right - left, fourth);
         for (var k = 1; k <= HighestLevel; k++)
         {
             var next = PlainCorrectionSum(HalfRangeRule.Ladder[k], piece, level, left, right - left, fourth);
-            if (Settled(last, next) || depth == 0) return next;
+            if (Settled(last, next) || depth == 0 || budget < 0) return next;
             last = next;
         }
 
