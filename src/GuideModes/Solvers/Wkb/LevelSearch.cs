@@ -12,7 +12,7 @@ internal static class LevelSearch
 {
     private const int MostSteps = 60;
 
-    public static LevelSample Find(Func<double, LevelSample> number, double target, double lower, double upper, double guess, double tolerance = 2e-15)
+    public static LevelSample Find(Func<double, LevelSample> number, double target, double lower, double upper, double guess, double tolerance = 1e-13)
     {
         var level = guess > lower && guess < upper ? guess : 0.5 * (lower + upper);
         LevelSample last = default;

@@ -36,8 +36,8 @@ internal sealed class ModeSearch
         var total = 0.0;
         foreach (var root in WellTree.Build(map))
         {
-            Search(root);
-            total += Math.Max(0, 1 + NumberAtLower(root));
+            Search(root, out var number);
+            total += Math.Max(0, 1 + number);
             if (found.Count > mostModes) return new([], total, SearchOutcome.TooManyModes);
         }
 
@@ -46,9 +46,8 @@ internal sealed class ModeSearch
     }
 
     /// <summary>ν at the lower end of a well's range, to second order where that is a small correction.</summary>
-    private double NumberAtLower(WellNode node)
+    private double NumberAtLower(WellNode node, double first)
     {
-        var first = orders.Sample(node, Just(node, Inset), PhaseKind.Uniform).Number;
         var level = Just(node, SecondOrderInset);
         var correction = orders.Sample(node, level, PhaseKind.SecondOrder).Number - orders.Sample(node, level, PhaseKind.Uniform).Number;
         return Math.Abs(correction) < OrderChoice.LargestCorrection / Math.PI ? first + correction : first;
@@ -56,12 +55,15 @@ internal sealed class ModeSearch
 
     private static double Just(WellNode node, double inset) => node.Lower + inset * (node.Upper - node.Lower);
 
-    private int Search(WellNode node)
+    /// <summary>Finds the modes of a well and of those that joined in it; the count of them all, and ν at the lower end of its range.</summary>
+    private int Search(WellNode node, out double number)
     {
         var order = 0;
-        if (node.Left is not null && node.Right is not null) order = Search(node.Left) + Search(node.Right);
+        if (node.Left is not null && node.Right is not null) order = Search(node.Left, out _) + Search(node.Right, out _);
         var lower = Just(node, Inset);
-        var last = Math.Max(NumberAtLower(node), orders.Sample(node, lower, PhaseKind.Uniform).Number);
+        var first = orders.Sample(node, lower, PhaseKind.Uniform).Number;
+        number = NumberAtLower(node, first);
+        var last = Math.Max(number, first);
         var (guess, previous) = (double.NaN, double.NaN);
         for (; order <= last && found.Count <= mostModes; order++)
         {

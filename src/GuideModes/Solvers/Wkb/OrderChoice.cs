@@ -20,7 +20,7 @@ internal sealed class OrderChoice(ProfileMap map, WellFinder finder, WellPhase p
     /// <summary>The fourth-order term is kept when below this share of the second (experience with x⁴, whose lowest mode it makes worse).</summary>
     private const double FourthShare = 0.2;
 
-    private const double SearchTolerance = 1e-11;
+    private const double SearchTolerance = 1e-10;
 
     public LevelSample Sample(WellNode node, double level, PhaseKind kind)
     {
@@ -37,8 +37,9 @@ internal sealed class OrderChoice(ProfileMap map, WellFinder finder, WellPhase p
         var solved = Math.Abs(uniform.Number - order) < 1e-6;
         var classic = Classic(node, order, lower, uniform);
         var second = LevelSearch.Find(e => Sample(node, e, PhaseKind.SecondOrder), order, lower, node.Upper, uniform.Level, SearchTolerance);
-        var atSecond = Sample(node, second.Level, PhaseKind.Uniform);
-        var correction = Math.Abs(second.Number - order) < 1e-6 ? Math.PI * Math.Abs(order - atSecond.Number) : double.PositiveInfinity;
+        var correction = Math.Abs(second.Number - order) > 1e-6 ? double.PositiveInfinity
+            : solved ? Math.PI * Math.Abs(uniform.Slope * (second.Level - uniform.Level))
+            : Math.PI * Math.Abs(order - Sample(node, second.Level, PhaseKind.Uniform).Number);
         if (!solved && !(correction < LargestCorrection) && uniform.Number < order) return null;
 
         var perRadian = 1 / Math.Max(Math.PI * Math.Abs(uniform.Slope), 1e-300);

@@ -67,6 +67,24 @@ internal sealed class WellPhase(ProfileMap map, WellFinder finder, PhaseIntegral
         return new(phase - End(last, level, 1, previousAction, kind, ref shift), inverse, shift);
     }
 
+    /// <summary>First-order phases for a field: S at the start of each arc and what each adds; the phase in excess of the ends' own is returned.</summary>
+    public double ArcPhases(double level, int wellIndex, Span<double> start, Span<double> length)
+    {
+        var well = finder.Wells[wellIndex];
+        var none = 0.0;
+        for (var i = 0; i < well.Count; i++)
+        {
+            var arc = finder.Arcs[well.First + i];
+            length[i] = k * integral.Over(arc.Piece, level, arc.Left, arc.Right, arc.LeftTurning, arc.RightTurning, arc.Split).Root;
+            start[i] = i == 0
+                ? -End(arc, level, -1, length[0], PhaseKind.Classic, ref none)
+                : Cross(finder.Arcs[well.First + i - 1], arc, level, start[i - 1] + length[i - 1], 0, 0, PhaseKind.Classic, ref none);
+        }
+
+        var last = finder.Arcs[well.First + well.Count - 1];
+        return start[well.Count - 1] + length[well.Count - 1] - End(last, level, 1, 0, PhaseKind.Classic, ref none);
+    }
+
     /// <summary>ν of a well between two turning points of one piece, by Dunham's rule to second order, joints ignored, and the fourth-order phase.</summary>
     public bool TrySmooth(int wellIndex, double level, bool fourth, out SmoothValue value)
     {
