@@ -1,4 +1,5 @@
 using GuideModes.Numerics;
+using MathNet.Numerics;
 
 namespace GuideModes.Solvers.Wkb;
 
@@ -23,6 +24,9 @@ internal readonly record struct PhaseValue(double Phase, double InverseRoot, dou
 {
     public double Number => Phase / Math.PI;
 }
+
+/// <summary>ν by Dunham's rule to second order, ∫dx/√q, and the fourth-order term of the phase.</summary>
+internal readonly record struct SmoothValue(double Number, double InverseRoot, double Fourth);
 
 /// <summary>The continuous mode number of a well, ν(n_eff²), to first or second order.</summary>
 /// <remarks>
@@ -63,6 +67,54 @@ internal sealed class WellPhase(ProfileMap map, WellFinder finder, PhaseIntegral
         return new(phase - End(last, level, 1, previousAction, kind, ref shift), inverse, shift);
     }
 
+    /// <summary>First-order phases for a field: S at the start of each arc and what each adds; the phase in excess of the ends' own is returned.</summary>
+    public double ArcPhases(double level, int wellIndex, Span<double> start, Span<double> length)
+    {
+        var well = finder.Wells[wellIndex];
+        var none = 0.0;
+        for (var i = 0; i < well.Count; i++)
+        {
+            var arc = finder.Arcs[well.First + i];
+            length[i] = k * integral.Over(arc.Piece, level, arc.Left, arc.Right, arc.LeftTurning, arc.RightTurning, arc.Split).Root;
+            start[i] = i == 0
+                ? -End(arc, level, -1, length[0], PhaseKind.Classic, ref none)
+                : Cross(finder.Arcs[well.First + i - 1], arc, level, start[i - 1] + length[i - 1], 0, 0, PhaseKind.Classic, ref none);
+        }
+
+        var last = finder.Arcs[well.First + well.Count - 1];
+        return start[well.Count - 1] + length[well.Count - 1] - End(last, level, 1, 0, PhaseKind.Classic, ref none);
+    }
+
+    /// <summary>ν of a well between two turning points of one piece, by Dunham's rule to second order, joints ignored, and the fourth-order phase.</summary>
+    public bool TrySmooth(int wellIndex, double level, bool fourth, out SmoothValue value)
+    {
+        value = default;
+        if (wellIndex < 0 || finder.Wells[wellIndex].Count != 1) return false;
+        var arc = finder.Arcs[finder.Wells[wellIndex].First];
+        if (!arc.LeftTurning || !arc.RightTurning) return false;
+        var action = integral.Over(arc.Piece, level, arc.Left, arc.Right, true, true, arc.Split);
+        var c = integral.CorrectionOver(arc, level, fourth);
+        var total = k * action.Root - c.Curvature / (48 * k) - c.Medium / (2 * k);
+        value = new(total / Math.PI - 0.5, action.InverseRoot, -c.Fourth / (1536 * k * k * k));
+        return true;
+    }
+
+    /// <summary>∫|κ| between two coordinates where n² &lt; n_eff² all along.</summary>
+    public double BarrierAction(double level, double left, double right)
+    {
+        var total = 0.0;
+        for (var i = 0; i < map.Starts.Length; i++)
+        {
+            var extent = map.Profile.Pieces[i].Extent;
+            var (from, to) = (Math.Max(left, extent.Start), Math.Min(right, extent.End));
+            if (!(to > from)) continue;
+            var (leftTurning, rightTurning) = (from > extent.Start, to < extent.End);
+            total += k * integral.Over(i, level, from, to, leftTurning, rightTurning, 0.5 * (from + to), -1).Root;
+        }
+
+        return total;
+    }
+
     /// <summary>∫s₂ over an arc, the ends that are not turning points included.</summary>
     private double SecondOrder(in Arc arc, double level)
     {
@@ -101,9 +153,11 @@ internal sealed class WellPhase(ProfileMap map, WellFinder finder, PhaseIntegral
         var near = SideAt(arc, level, side, action, kind);
         var drive = Ratio(joint, -side) * DecayRate(joint, side, level, kind, 0);
         var phase = Math.Atan((drive - near.AmplitudeSlope + near.MediumSlope) / near.Rate) - near.Offset;
-        if (near.Blend > 0) shift += Math.Abs(phase - ClassicEnd(arc, level, side, joint));
+        if (kind == PhaseKind.Uniform) shift += ShiftFrom(ClassicEnd(arc, level, side, joint), phase);
         return phase;
     }
+
+    private static double ShiftFrom(double classic, double phase) => Math.Abs(phase - classic) is var d && d > 1e-13 ? d : 0;
 
     private double ClassicEnd(in Arc arc, double level, int side, int joint)
     {
@@ -224,22 +278,31 @@ internal sealed class WellPhase(ProfileMap map, WellFinder finder, PhaseIntegral
         var turning = side > 0 ? arc.Right : arc.Left;
         if (!BarrierInPiece(arc.Piece, turning, level, side, out var action)) return 0;
         var s = JetAt(arc, side);
-        var q = k * k * Math.Max(level - s.Value, 1e-30);
         var z = Math.Max(Math.Pow(1.5 * action, 2.0 / 3), 1e-9);
-        var slope = -side * k * k * s.D1;
-        var rate = Math.Sqrt(q / z);
-        if (z < 1e-6) rate = Math.Cbrt(Math.Max(slope, 1e-30));
-        var bend = z > 0.02 ? (slope - rate * rate * rate) / (2 * rate * z) : -k * k * s.D2 / (5 * rate * rate);
         var joint = side > 0 ? arc.Piece + 1 : arc.Piece;
         var medium = map.IsTransverseMagnetic && kind == PhaseKind.SecondOrder ? side * s.D1 / (2 * s.Value) : 0;
         var log = -Ratio(joint, -side) * DecayRate(joint, side, level, kind, 0) - medium;
-        return Math.Atan2(Numerator(z, (log + 0.5 * bend / rate) / rate, out var denominator), denominator);
+        var (fall, rise) = EdgeRates(s, level, side, z, kind);
+        return Math.Atan2((log + fall) * SpecialFunctions.AiryAi(z), (rise - log) * SpecialFunctions.AiryBi(z));
     }
 
-    private static double Numerator(double z, double log, out double denominator)
+    /// <summary>
+    /// The outward rates of the falling and the rising solution where a barrier behind a turning point ends: Langer's, unless
+    /// the local slope says that n² has long levelled off there.
+    /// </summary>
+    private (double Fall, double Rise) EdgeRates(in Jet s, double level, int side, double z, PhaseKind kind)
     {
-        denominator = MathNet.Numerics.SpecialFunctions.AiryBiPrime(z) - log * MathNet.Numerics.SpecialFunctions.AiryBi(z);
-        return -(MathNet.Numerics.SpecialFunctions.AiryAiPrime(z) - log * MathNet.Numerics.SpecialFunctions.AiryAi(z));
+        var local = Rates(s, level, side, kind);
+        var q = k * k * Math.Max(level - s.Value, 1e-30);
+        var slope = -side * k * k * s.D1;
+        var spread = slope > 0 ? Math.Abs(Math.Log(q / Math.Pow(slope, 2.0 / 3) / z)) : 10;
+        var weight = z < 1e-6 ? 1 : 1 - Smooth((spread - 0.5) / 0.7);
+        if (weight == 0) return local;
+        var rate = z < 1e-6 ? Math.Cbrt(Math.Max(slope, 1e-30)) : Math.Sqrt(q / z);
+        var bend = z > 0.02 ? (slope - rate * rate * rate) / (2 * rate * z) : -k * k * s.D2 / (5 * rate * rate);
+        var (fall, rise) = AiryRates(z, rate);
+        var half = 0.5 * bend / rate;
+        return (weight * (fall + half) + (1 - weight) * local.Fall, weight * (rise - half) + (1 - weight) * local.Rise);
     }
 
     /// <summary>The action from a turning point outward to the end of its piece; false where it is large or another well comes first.</summary>
@@ -335,6 +398,6 @@ internal sealed class WellPhase(ProfileMap map, WellFinder finder, PhaseIntegral
     }
 
     private static (double Fall, double Rise) AiryRates(double z, double scale) => (
-        -scale * MathNet.Numerics.SpecialFunctions.AiryAiPrime(z) / MathNet.Numerics.SpecialFunctions.AiryAi(z),
-        scale * MathNet.Numerics.SpecialFunctions.AiryBiPrime(z) / MathNet.Numerics.SpecialFunctions.AiryBi(z));
+        -scale * SpecialFunctions.AiryAiPrime(z) / SpecialFunctions.AiryAi(z),
+        scale * SpecialFunctions.AiryBiPrime(z) / SpecialFunctions.AiryBi(z));
 }
