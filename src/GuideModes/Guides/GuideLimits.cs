@@ -1,3 +1,5 @@
+using GuideModes.Profiles;
+
 namespace GuideModes.Guides;
 
 /// <summary>The ranges a guide document is held to.</summary>
@@ -22,7 +24,7 @@ public static class GuideLimits
     public static NumberRange Alpha { get; } = new(0.5, 1000, "");
 
     /// <summary>No guide reaches further than this from the cover, µm: ten centimetres.</summary>
-    public const double FurthestUm = 1e5;
+    public const double FurthestUm = IndexLaw.FurthestUm;
 
     public const int MostRegions = 200;
 

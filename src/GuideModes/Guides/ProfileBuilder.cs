@@ -71,13 +71,13 @@ internal sealed class ProfileBuilder(GuideDraft draft, FaultList faults)
     private bool Fill(RegionDraft region, int number, Interval extent)
     {
         var path = $"regions[{number}]";
+        if (!(extent.Length > 0)) return true;
         if (region.Law.Misfit(extent, region.ThicknessUm is null, draft.Wavelength) is { } misfit)
         {
             faults.Add($"{path}.index.{misfit.Path}", misfit.Message);
             return true;
         }
 
-        if (!(extent.Length > 0)) return true;
         if (_compiledNodes > GuideLimits.MostCompiledNodes)
         {
             faults.Add("regions", $"The formulas change branch (abs, min, max) too often for their length; use shorter formulas or fewer branches.");

@@ -240,7 +240,7 @@ public sealed class GuideReaderTest
         var fault = Assert.Single(Faults(GuideDocument.Parse(Valid).With("regions[0].index", JsonNode.Parse($"{{ \"law\": \"formula\", \"n\": \"{formula}\" }}"))));
 
         Assert.Equal("regions[0].index.n", fault.Path);
-        Assert.Contains("has 21 abs, min and max; at most 20", fault.Message, StringComparison.Ordinal);
+        Assert.Contains("has 21 abs, min, max and roots of x; at most 20", fault.Message, StringComparison.Ordinal);
     }
 
     [Fact]
