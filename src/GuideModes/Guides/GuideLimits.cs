@@ -39,8 +39,8 @@ public static class GuideLimits
     /// <summary>Numbers, names and operators in all formulas of a guide together.</summary>
     public const int MostFormulaNodes = 5000;
 
-    /// <summary>The same, each formula counted once for every piece that its branches (abs, min, max) cut it into.</summary>
-    public const int MostCompiledNodes = 20_000;
+    /// <summary>The same, each formula counted once for every piece that its joints (abs, min, max, roots) cut its region into.</summary>
+    public const int MostCompiledNodes = 2 * FormulaLaw.MaximumCompiledSize;
 
     public const int LongestName = 200;
 

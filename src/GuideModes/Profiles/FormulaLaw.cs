@@ -16,6 +16,12 @@ public sealed record FormulaLaw(GradedQuantity Quantity, Formula Formula) : Inde
     /// <summary>How many abs, min, max and roots a formula may have.</summary>
     public const int MaximumJointKinds = 20;
 
+    /// <summary>How large the arguments of all of them may be together.</summary>
+    public const int MaximumJointSize = 500;
+
+    /// <summary>The formula's size times the pieces that its joints cut the region into.</summary>
+    public const int MaximumCompiledSize = 20_000;
+
     private const int Samples = 2000;
 
     public override double? Limit(Wavelength wavelength) => Index(FurthestUm, wavelength);
@@ -38,8 +44,13 @@ public sealed record FormulaLaw(GradedQuantity Quantity, Formula Formula) : Inde
     {
         if (Formula.Joints.Length > MaximumJointKinds)
             return new("n", $"The formula has {Formula.Joints.Length} abs, min, max and roots of x; at most {MaximumJointKinds} are allowed.");
-        return Joints(extent, wavelength).Count() > MaximumJoints
-            ? new("n", $"The formula changes branch (abs, min, max, roots) more than {MaximumJoints} times in the region; at most {MaximumJoints} are allowed.")
+        if (Formula.Joints.Sum(node => node.Size) > MaximumJointSize)
+            return new("n", $"What stands inside abs, min, max and roots is too long: at most {MaximumJointSize} numbers, names and operators are allowed there together.");
+        var joints = Joints(extent, wavelength).Count();
+        if (joints > MaximumJoints)
+            return new("n", $"The formula changes branch (abs, min, max, roots) more than {MaximumJoints} times in the region; at most {MaximumJoints} are allowed.");
+        return (joints + 1) * FormulaSize > MaximumCompiledSize
+            ? new("n", $"The formula changes branch (abs, min, max, roots) {joints} times, too often for its length; use a shorter formula or several regions.")
             : null;
     }
 
