@@ -69,7 +69,7 @@ internal sealed class IndexReader(Wavelength? wavelength, FormulaReader formulas
         var path = fields.At("formula");
         if (formulas.Read(fields.Find("formula", "a formula")!.Value, path, null) is not { } formula) return null;
         if (wavelength is not { } at) return null;
-        var index = formula.Value(0, at.Micrometres);
+        var index = formula.Jet(0, at.Micrometres).Value;
         if (range.Contains(index)) return new(formula);
         faults.Add(path, $"The formula gives {index} at {at.Micrometres} µm; {range.Description} is allowed.");
         return null;

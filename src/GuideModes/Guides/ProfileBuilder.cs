@@ -71,23 +71,23 @@ internal sealed class ProfileBuilder(GuideDraft draft, FaultList faults)
     private bool Fill(RegionDraft region, int number, Interval extent)
     {
         var path = $"regions[{number}]";
+        if (!(extent.Length > 0)) return true;
         if (region.Law.Misfit(extent, region.ThicknessUm is null, draft.Wavelength) is { } misfit)
         {
             faults.Add($"{path}.index.{misfit.Path}", misfit.Message);
             return true;
         }
 
-        if (!(extent.Length > 0)) return true;
-        if (_compiledNodes > GuideLimits.MostCompiledNodes)
-        {
-            faults.Add("regions", $"The formulas change branch (abs, min, max) too often for their length; use shorter formulas or fewer branches.");
-            return false;
-        }
-
         var pieces = region.Law.Pieces(extent, number, draft.Wavelength).ToArray();
         Check(pieces, region.Law.Landmarks(extent).ToArray(), $"{path}.index");
         _pieces.AddRange(pieces);
         _compiledNodes += pieces.Length * region.Law.FormulaSize;
+        if (_compiledNodes > GuideLimits.MostCompiledNodes)
+        {
+            faults.Add("regions", "The formulas change branch (abs, min, max, roots) too often for their length; use shorter formulas or fewer branches.");
+            return false;
+        }
+
         if (_pieces.Count <= GuideLimits.MostPieces) return true;
         faults.Add("regions", $"The guide has more than {GuideLimits.MostPieces} smooth pieces (table intervals and the like); at most {GuideLimits.MostPieces} are allowed.");
         return false;

@@ -4,21 +4,27 @@ namespace GuideModes.Profiles;
 
 /// <summary>n (or, with <see cref="GradedQuantity.IndexSquared"/>, n²) is a formula in x and lambda.</summary>
 /// <remarks>
-/// The region is cut where an abs, min or max changes branch, and each piece keeps its own branch up to its ends.
-/// Those places, and where a region to infinity may be cut, are found by sampling (evenly, by doubling distance and at every number in the formula)
+/// The region is cut where an abs, min or max changes branch, and each piece keeps its own branch up to its ends; it is also cut where the argument of a
+/// root is zero, and there, at a piece's end, derivatives may be unbounded. Those places, and where a region to infinity may be cut, are found by sampling (evenly, by doubling distance and at every number in the formula)
 /// and bisection: two changes between neighbouring samples can be missed.
 /// </remarks>
 public sealed record FormulaLaw(GradedQuantity Quantity, Formula Formula) : IndexLaw
 {
-    /// <summary>How often a formula may change branch in one region.</summary>
-    public const int MaximumBranchChanges = 200;
+    /// <summary>How often a formula may change branch, or a root in it end, within one region.</summary>
+    public const int MaximumJoints = 200;
 
-    /// <summary>How many abs, min and max a formula may have.</summary>
-    public const int MaximumSwitches = 20;
+    /// <summary>How many abs, min, max and roots a formula may have.</summary>
+    public const int MaximumJointKinds = 20;
+
+    /// <summary>How large the arguments of all of them may be together.</summary>
+    public const int MaximumJointSize = 500;
+
+    /// <summary>The formula's size times the pieces that its joints cut the region into.</summary>
+    public const int MaximumCompiledSize = 20_000;
 
     private const int Samples = 2000;
 
-    public override double? Limit(Wavelength wavelength) => Index(FarAway, wavelength);
+    public override double? Limit(Wavelength wavelength) => Index(FurthestUm, wavelength);
 
     public override double? SettlesAt(double start, double furthest, Wavelength wavelength)
     {
@@ -36,28 +42,30 @@ public sealed record FormulaLaw(GradedQuantity Quantity, Formula Formula) : Inde
 
     public override Fault? Misfit(Interval extent, bool isUnbounded, Wavelength wavelength)
     {
-        if (Formula.Switches.Length > MaximumSwitches)
-            return new("n", $"The formula has {Formula.Switches.Length} abs, min and max; at most {MaximumSwitches} are allowed.");
-        return BranchChanges(extent, wavelength).Count() > MaximumBranchChanges
-            ? new("n", $"The formula changes branch (abs, min, max) more than {MaximumBranchChanges} times in the region; at most {MaximumBranchChanges} are allowed.")
+        if (Formula.Joints.Length > MaximumJointKinds)
+            return new("n", $"The formula has {Formula.Joints.Length} abs, min, max and roots of x; at most {MaximumJointKinds} are allowed.");
+        if (Formula.Joints.Sum(node => node.Size) > MaximumJointSize)
+            return new("n", $"What stands inside abs, min, max and roots is too long: at most {MaximumJointSize} numbers, names and operators are allowed there together.");
+        var joints = Joints(extent, wavelength).Count();
+        if (joints > MaximumJoints)
+            return new("n", $"The formula changes branch (abs, min, max, roots) more than {MaximumJoints} times in the region; at most {MaximumJoints} are allowed.");
+        return (joints + 1) * FormulaSize > MaximumCompiledSize
+            ? new("n", $"The formula changes branch (abs, min, max, roots) {joints} times, too often for its length; use a shorter formula or several regions.")
             : null;
     }
 
     public override IEnumerable<SmoothPiece> Pieces(Interval extent, int region, Wavelength wavelength)
     {
         var lambda = wavelength.Micrometres;
-        if (Formula.Switches.IsEmpty) return [new FormulaPiece(extent, region, Quantity, Formula, lambda)];
+        if (Formula.Joints.IsEmpty) return [new FormulaPiece(extent, region, Quantity, Formula, lambda)];
         var branches = new Dictionary<FormulaNode, Formula>();
-        return [.. extent.SplitAt(BranchChanges(extent, wavelength).Take(MaximumBranchChanges + 1)).Select(part =>
+        return [.. extent.SplitAt(Joints(extent, wavelength).Take(MaximumJoints + 1)).Select(part =>
             new FormulaPiece(part, region, Quantity, BranchAt(part.Middle, lambda, branches), lambda))];
     }
 
     internal override int FormulaSize => Formula.Root.Size;
 
     internal override IEnumerable<double> Landmarks(Interval extent) => EvenSamples(extent);
-
-    /// <summary>The coordinate that stands for infinity: the furthest a region may reach.</summary>
-    private static double FarAway => 1e5;
 
     private double Index(double x, Wavelength wavelength) => Math.Sqrt(IndexSquared(x, wavelength));
 
@@ -72,12 +80,12 @@ public sealed record FormulaLaw(GradedQuantity Quantity, Formula Formula) : Inde
         return branch;
     }
 
-    private IEnumerable<double> BranchChanges(Interval extent, Wavelength wavelength)
+    private IEnumerable<double> Joints(Interval extent, Wavelength wavelength)
     {
-        var switches = Formula.Switches;
-        if (switches.IsEmpty) return [];
+        var kinds = Formula.Joints;
+        if (kinds.IsEmpty) return [];
         var samples = EvenSamples(extent);
-        return switches.SelectMany(node => SignChanges(x => node.Evaluate(x, wavelength.Micrometres), samples)).Order();
+        return kinds.SelectMany(node => SignChanges(x => node.Evaluate(x, wavelength.Micrometres), samples)).Order();
     }
 
     private static IEnumerable<double> SignChanges(Func<double, double> function, double[] samples)

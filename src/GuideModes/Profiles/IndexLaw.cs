@@ -4,6 +4,9 @@ namespace GuideModes.Profiles;
 /// <remarks>Coordinates are global: x = 0 is the cover interface whatever regions come before.</remarks>
 public abstract record IndexLaw
 {
+    /// <summary>No region reaches further than this from the cover, µm; for a formula it stands for infinity.</summary>
+    public const double FurthestUm = 1e5;
+
     /// <summary>n² over a stretch of positive length, as contiguous smooth pieces from left to right.</summary>
     public abstract IEnumerable<SmoothPiece> Pieces(Interval extent, int region, Wavelength wavelength);
 

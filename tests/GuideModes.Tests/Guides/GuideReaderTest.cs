@@ -240,7 +240,38 @@ public sealed class GuideReaderTest
         var fault = Assert.Single(Faults(GuideDocument.Parse(Valid).With("regions[0].index", JsonNode.Parse($"{{ \"law\": \"formula\", \"n\": \"{formula}\" }}"))));
 
         Assert.Equal("regions[0].index.n", fault.Path);
-        Assert.Contains("has 21 abs, min and max; at most 20", fault.Message, StringComparison.Ordinal);
+        Assert.Contains("has 21 abs, min, max and roots of x; at most 20", fault.Message, StringComparison.Ordinal);
+    }
+
+    [Fact]
+    public void Read_TooManyBranchChangesForTheFormulasLength_IsRefused()
+    {
+        static string Region(int terms)
+        {
+            var filler = string.Concat(Enumerable.Repeat("+x-x", terms));
+            return $"{{ \"thicknessUm\": 1, \"index\": {{ \"law\": \"formula\", \"n\": \"1.5+0.01*abs(sin(500*x)){filler}\" }} }}";
+        }
+
+        var document = GuideDocument.Parse(Valid);
+        var one = Assert.Single(Faults(document.With("regions", JsonNode.Parse($"[{Region(60)}]"))));
+        Assert.Equal("regions[0].index.n", one.Path);
+        Assert.Contains("too often for its length", one.Message, StringComparison.Ordinal);
+
+        var many = Assert.Single(Faults(document.With("regions", JsonNode.Parse($"[{string.Join(",", Enumerable.Repeat(Region(20), 6))}]"))));
+        Assert.Equal("regions", many.Path);
+        Assert.Contains("too often for their length", many.Message, StringComparison.Ordinal);
+    }
+
+    [Fact]
+    public void Read_BranchesNestedTooLong_IsRefused()
+    {
+        var inner = string.Concat(Enumerable.Repeat("+x-x", 50));
+        var nested = string.Concat(Enumerable.Repeat("abs(", 10)) + "x" + inner + new string(')', 10);
+        var document = GuideDocument.Parse(Valid).With("regions[0].index", JsonNode.Parse($"{{ \"law\": \"formula\", \"n\": \"1.5+0*{nested}\" }}"));
+
+        var fault = Assert.Single(Faults(document));
+        Assert.Equal("regions[0].index.n", fault.Path);
+        Assert.Contains("is too long: at most 500", fault.Message, StringComparison.Ordinal);
     }
 
     [Fact]

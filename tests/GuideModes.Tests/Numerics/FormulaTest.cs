@@ -118,8 +118,8 @@ public sealed class FormulaTest
     {
         var formula = Formula.Parse("abs(x-3) + max(x, 5) + min(2, x)", "x");
         var branch = formula.OnBranchOf(1, 1);
-        Assert.Equal(3, formula.Switches.Length);
-        Assert.Empty(branch.Switches);
+        Assert.Equal(3, formula.Joints.Length);
+        Assert.Empty(branch.Joints);
         Assert.Equal(3 - 10 + 5 + 10, branch.Value(10, 1));
         Assert.Equal(0, branch.Jet(3, 1).D1);
     }

@@ -126,6 +126,12 @@ public sealed class IndexLawTest
         Assert.Equal(2, pieces.Length);
     }
 
+    [Theory]
+    [InlineData("1.5 + 0.01*sqrt((x-4)^2)")]
+    [InlineData("1.5 + 0.01*((x-4)^2)^1.5")]
+    public void Pieces_OfARootThatTouchesZero_SplitThere(string text) =>
+        Assert.Equal([1, 4], Pieces(new FormulaLaw(GradedQuantity.Index, Formula.Parse(text, "x"))).Select(piece => piece.Extent.Start));
+
     [Fact]
     public void Pieces_OfATable_AreOnePerInterval()
     {
