@@ -27,8 +27,22 @@ internal sealed class OrderChoice(ProfileMap map, WellFinder finder, WellPhase p
         finder.Find(level);
         var well = finder.Holding(node.Anchor);
         if (well < 0) return new(level, -1, -1, 0);
+        if (kind == PhaseKind.SecondOrder && phase.SecondOrderClearance(level, well) is var clearance && clearance > 0)
+            return Cleared(node, level, level - clearance);
         var value = phase.Evaluate(level, well, kind);
         return new(level, value.Number, -map.Wavenumber / (2 * Math.PI) * value.InverseRoot, value.EndShift);
+    }
+
+    /// <summary>The second order with its correction taken at a level a little lower, clear of joints.</summary>
+    private LevelSample Cleared(WellNode node, double level, double clear)
+    {
+        var here = Sample(node, level, PhaseKind.Uniform);
+        if (clear <= node.Lower) return here;
+        finder.Find(clear);
+        var well = finder.Holding(node.Anchor);
+        if (well < 0 || phase.SecondOrderClearance(clear, well) > 1e-12) return here;
+        var correction = phase.Evaluate(clear, well, PhaseKind.SecondOrder).Number - phase.Evaluate(clear, well, PhaseKind.Uniform).Number;
+        return here with { Number = here.Number + correction };
     }
 
     /// <summary>The mode with its best order; null where no order puts it above the lower end of the range.</summary>

@@ -41,7 +41,7 @@ internal readonly record struct SmoothValue(double Number, double InverseRoot, d
 /// </remarks>
 internal sealed class WellPhase(ProfileMap map, WellFinder finder, PhaseIntegral integral)
 {
-    private const double NearZeta = 2, FarZeta = 4, FarAction = 20;
+    private const double NearZeta = 2, FarZeta = 4, FarAction = 20, NearestZeta = 0.02;
     private readonly double k = map.Wavenumber;
 
     /// <summary>The phase of a well that the finder holds for this level.</summary>
@@ -84,6 +84,27 @@ internal sealed class WellPhase(ProfileMap map, WellFinder finder, PhaseIntegral
         var last = finder.Arcs[well.First + well.Count - 1];
         return start[well.Count - 1] + length[well.Count - 1] - End(last, level, 1, 0, PhaseKind.Classic, ref none);
     }
+
+    /// <summary>
+    /// How far n_eff² has to be lowered before no turning point is within a small part of an Airy length of a joint: nearer than that the
+    /// second-order integrals nearly cancel, and what they leave hardly changes.
+    /// </summary>
+    public double SecondOrderClearance(double level, int wellIndex)
+    {
+        var well = finder.Wells[wellIndex];
+        var clearance = 0.0;
+        for (var i = 0; i < well.Count; i++)
+        {
+            var arc = finder.Arcs[well.First + i];
+            if (!arc.LeftTurning) clearance = Math.Max(clearance, Clearance(JetAt(arc, -1), level));
+            if (!arc.RightTurning) clearance = Math.Max(clearance, Clearance(JetAt(arc, 1), level));
+        }
+
+        return clearance;
+    }
+
+    private double Clearance(in Jet s, double level) =>
+        s.D1 == 0 ? 0 : Math.Max(0, NearestZeta * Math.Pow(Math.Abs(k * k * s.D1), 2.0 / 3) / (k * k) - (s.Value - level));
 
     /// <summary>ν of a well between two turning points of one piece, by Dunham's rule to second order, joints ignored, and the fourth-order phase.</summary>
     public bool TrySmooth(int wellIndex, double level, bool fourth, out SmoothValue value)
@@ -211,7 +232,7 @@ internal sealed class WellPhase(ProfileMap map, WellFinder finder, PhaseIntegral
         var second = kind == PhaseKind.SecondOrder;
         var medium = second && map.IsTransverseMagnetic ? side * s.D1 / (2 * s.Value) : 0;
         var plain = new Side(kappa, second ? slope / (4 * q) : 0, medium, 0, 0);
-        var langer = Nearest(arc, q, slope, k * k * s.D2, side, action);
+        var langer = Nearest(arc, q, slope, k * k * s.D2, side, action, Opposite(arc, level, side));
         return langer.Weight > 0 ? Mix(plain, langer, second) : plain;
     }
 
@@ -236,13 +257,22 @@ internal sealed class WellPhase(ProfileMap map, WellFinder finder, PhaseIntegral
             at.Weight);
     }
 
-    private static Langer Nearest(in Arc arc, double q, double slope, double curvature, int side, double action)
+    /// <summary>The virtual turning point beyond the other end of an arc.</summary>
+    private Langer Opposite(in Arc arc, double level, int side)
+    {
+        var s = JetAt(arc, -side);
+        var q = k * k * (s.Value - level);
+        return q > 0 && side * s.D1 > 0 ? Virtual(q, side * k * k * s.D1, k * k * s.D2) : default;
+    }
+
+    private static Langer Nearest(in Arc arc, double q, double slope, double curvature, int side, double action, in Langer opposite)
     {
         var beyond = slope < 0 ? Virtual(q, -slope, curvature) : default;
         var inside = side > 0 ? arc.LeftTurning : arc.RightTurning;
-        if (!inside) return beyond;
-        var zeta = Math.Pow(1.5 * action, 2.0 / 3);
-        var weight = Far(zeta);
+        if (!inside && (opposite.Weight == 0 || slope <= 0)) return beyond;
+        var phase = inside ? action : action + 2.0 / 3 * opposite.Zeta * Math.Sqrt(opposite.Zeta);
+        var zeta = Math.Pow(1.5 * phase, 2.0 / 3);
+        var weight = Far(zeta) * (inside ? 1 : opposite.Weight);
         if (weight <= beyond.Weight) return beyond;
         var rate = Math.Sqrt(q / Math.Max(zeta, 1e-150));
         var bend = zeta > 0.02 ? (slope - rate * rate * rate) / (2 * rate * zeta) : curvature / (5 * rate * rate);
@@ -378,8 +408,21 @@ internal sealed class WellPhase(ProfileMap map, WellFinder finder, PhaseIntegral
         var (fallFar, riseFar) = Rates(far, level, side, kind);
         var mediumFar = map.IsTransverseMagnetic && kind == PhaseKind.SecondOrder ? side * far.D1 / (2 * far.Value) : 0;
         var log = -Ratio(next, -side) * DecayRate(next, side, level, kind, depth + 1) - mediumFar;
-        var growth = (log + fallFar) / (riseFar - log) * Math.Exp(-2 * action);
+        var growth = (log + fallFar) / (riseFar - log) * Through(near, level, side, action);
         return (fall - growth * rise) / (1 + growth) - medium;
+    }
+
+    /// <summary>What a wave that rises toward the near edge of a barrier has left there, against the falling one: e^(−2η), or its Airy form near a turning point.</summary>
+    private double Through(in Jet near, double level, int side, double action)
+    {
+        var slope = -side * k * k * near.D1;
+        var plain = Math.Exp(-2 * action);
+        var z = slope > 0 ? k * k * Math.Max(level - near.Value, 1e-30) / Math.Pow(slope, 2.0 / 3) : FarZeta;
+        var weight = Far(z);
+        if (weight == 0) return plain;
+        var far = Math.Pow(z * Math.Sqrt(z) + 1.5 * action, 2.0 / 3);
+        var airy = SpecialFunctions.AiryAi(far) * SpecialFunctions.AiryBi(z) / (SpecialFunctions.AiryBi(far) * SpecialFunctions.AiryAi(z));
+        return weight * airy + (1 - weight) * plain;
     }
 
     /// <summary>The outward rates of the falling and the rising solution at the edge of a graded barrier.</summary>

@@ -101,9 +101,9 @@ internal sealed class WkbField
     }
 
     /// <summary>∫κ from the start of an arc to x, from the last one asked for if that lies near.</summary>
-    private double PhaseTo(in Arc arc, int i, double x)
+    private double PhaseTo(in Arc arc, int i, double x, double s2)
     {
-        var room = Math.Min(Room(arc.LeftTurning, arc.Left, x), Room(arc.RightTurning, arc.Right, x));
+        var room = Math.Min(ShortStep(s2), Math.Min(Room(arc.LeftTurning, arc.Left, x), Room(arc.RightTurning, arc.Right, x)));
         var phase = lastArc == i && Math.Abs(x - lastX) < room
             ? lastPhase + k * integral.Short(arc.Piece, level, lastX, x, 1)
             : WholePhaseTo(arc, i, x);
@@ -113,10 +113,10 @@ internal sealed class WkbField
 
     /// <summary>How long a step from the last coordinate to this one may be for the low rule.</summary>
     private double Room(bool turning, double end, double x) =>
-        turning ? Math.Min(ShortStep, 0.3 * Math.Min(Math.Abs(x - end), Math.Abs(lastX - end))) : ShortStep;
+        turning ? 0.3 * Math.Min(Math.Abs(x - end), Math.Abs(lastX - end)) : double.PositiveInfinity;
 
-    /// <summary>A third of a vacuum wavelength.</summary>
-    private double ShortStep => 2 / k;
+    /// <summary>The distance over which the phase moves by at most three radians at the rate of here.</summary>
+    private double ShortStep(double s2) => 3 / (k * Math.Sqrt(Math.Abs(s2 - level)) + 1e-12);
 
     private double WholePhaseTo(in Arc arc, int i, double x)
     {
@@ -128,10 +128,10 @@ internal sealed class WkbField
     private double Inside(int i, double x)
     {
         var arc = finder.Arcs[well.First + i];
-        var phase = PhaseTo(arc, i, x);
+        var s2 = map.Profile.Pieces[arc.Piece].IndexSquared(x);
+        var phase = PhaseTo(arc, i, x, s2);
         var share = total > 0 ? (before[i] + phase) / total : 0.5;
         var s = start[i] + phase + lack * share;
-        var s2 = map.Profile.Pieces[arc.Piece].IndexSquared(x);
         var q = k * k * Math.Max(s2 - level, 1e-30);
         var medium = map.IsTransverseMagnetic ? Math.Sqrt(s2) : 1;
         var root = Math.Sqrt(Math.Sqrt(q));
@@ -183,7 +183,7 @@ internal sealed class WkbField
         var medium = map.IsTransverseMagnetic ? Math.Sqrt(s2) : 1;
         var a = side > 0 ? amplitude[^1] : amplitude[0];
         var slot = side > 0 ? -2 : -3;
-        var xi = lastArc == slot && Math.Abs(x - lastX) < Room(true, turning, x)
+        var xi = lastArc == slot && Math.Abs(x - lastX) < Math.Min(ShortStep(s2), Room(true, turning, x))
             ? lastPhase + side * k * integral.Short(piece, level, lastX, x, -1)
             : k * integral.Over(piece, level, Math.Min(x, turning), Math.Max(x, turning), side > 0, side < 0, 0, -1).Root;
         (lastArc, lastX, lastPhase) = (slot, x, xi);

@@ -56,6 +56,59 @@ public class WkbSolverTests(ITestOutputHelper output)
         }
     }
 
+    [Theory]
+    [InlineData("s08-parabola-wide-te", 1.4608, 1.4720)]
+    [InlineData("s14-linear-te", 1.50001, 1.5499)]
+    [InlineData("s15-power4-te", 1.44401, 1.4648)]
+    [InlineData("s20-table-te", 1.51301, 1.5515)]
+    [InlineData("s07-parabola-trunc-te", 1.46001, 1.4798)]
+    [InlineData("s11-gauss-air-te", 1.51001, 1.5598)]
+    [InlineData("s12-erfc-air-te", 2.20001, 2.2198)]
+    [InlineData("s13-gauss-air-tm", 1.51001, 1.5598)]
+    public void ScanScratch(string id, double from, double to)
+    {
+        var map = new ProfileMap(WkbCases.Problem(id));
+        var node = WellTree.Build(map)[0];
+        var finder = new WellFinder(map);
+        var orders = new OrderChoice(map, finder, new WellPhase(map, finder, new(map)));
+        foreach (var kind in Enum.GetValues<PhaseKind>())
+        {
+            const int n = 4000;
+            var (worst, at, rise, riseAt, last) = (0.0, 0.0, 0.0, 0.0, double.NaN);
+            var (last2, slope) = (double.NaN, 0.0);
+            for (var i = 0; i <= n; i++)
+            {
+                var e = from + (to - from) * i / n;
+                var v = orders.Sample(node, e * e, kind).Number;
+                var d = v - last;
+                if (i > 1 && d > rise) (rise, riseAt) = (d, e);
+                if (i > 2 && Math.Abs(d - slope) > worst) (worst, at) = (Math.Abs(d - slope), e);
+                (slope, last) = (d, v);
+            }
+
+            output.WriteLine($"{id} {kind} worst jump {worst:E2} at {at:F6} mean step {(orders.Sample(node, from * from, kind).Number - orders.Sample(node, to * to, kind).Number) / n:E2}; worst rise {rise:E2} at {riseAt:F6}");
+        }
+    }
+
+    [Theory]
+    [InlineData("s08-parabola-wide-te", 80.0)]
+    [InlineData("s20-table-te", 6.0)]
+    [InlineData("s20-table-te", 0.5)]
+    public void ZoomScratch(string id, double x)
+    {
+        var map = new ProfileMap(WkbCases.Problem(id));
+        var node = WellTree.Build(map)[0];
+        var finder = new WellFinder(map);
+        var orders = new OrderChoice(map, finder, new WellPhase(map, finder, new(map)));
+        var j = Enumerable.Range(0, map.Ends.Length).First(i => map.Profile.Pieces[i].Extent.End == x);
+        var e = map.Ends[j].Value;
+        foreach (var d in new[] { -1e-2, -1e-3, -1e-4, -1e-6, -1e-8, -1e-10, 1e-10, 1e-8, 1e-6, 1e-4, 1e-3 })
+        {
+            var v = Enum.GetValues<PhaseKind>().Select(k => orders.Sample(node, e + d, k)).ToArray();
+            output.WriteLine($"zoom {id} {d:E1} {v[0].Number:F7} {v[1].Number:F7} {v[2].Number:F7}");
+        }
+    }
+
     [Fact]
     public void Count()
     {
@@ -90,6 +143,16 @@ public class WkbSolverTests(ITestOutputHelper output)
         }
 
         output.WriteLine($"fast {best:F4} ms");
+        var sol = new WkbSolver().Solve(p);
+        foreach (var m in new[] { 0, 1, 5, 10, 19 })
+        {
+            (c.Values, c.Jets) = (0, 0);
+            new WkbSolver().Field(WkbCases.Problem(0.6328, 1.0, 1.51, c), sol.Modes[m], [.. Enumerable.Range(0, 300).Select(i => -1 + 0.2 * i)]);
+            var ft = System.Diagnostics.Stopwatch.StartNew();
+            for (var i = 0; i < 20; i++) new WkbSolver().Field(p, sol.Modes[m], [.. Enumerable.Range(0, 300).Select(i => -1 + 0.2 * i)]);
+            output.WriteLine($"values field {m} {c.Values} jets {c.Jets} {ft.Elapsed.TotalMilliseconds / 20} ms");
+        }
+
         var t = System.Diagnostics.Stopwatch.StartNew();
         double sum = 0;
         for (var i = 0; i < 1000; i++) sum += GuideModes.Solvers.Wkb.AiryPhase.At(0.003 * i).Theta;
