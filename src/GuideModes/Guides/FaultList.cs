@@ -28,7 +28,6 @@ internal sealed class FaultList
     {
         JsonValueKind.Object => "an object",
         JsonValueKind.Array => "a list",
-        JsonValueKind.String when Json.Text(value) is not { } => "text that is not valid Unicode",
         _ => Shortened(value.GetRawText()),
     };
 

@@ -24,7 +24,7 @@ public sealed class GuideDocument : IEquatable<GuideDocument>
 
     private static readonly JsonSerializerOptions Compact = new() { Encoder = JavaScriptEncoder.UnsafeRelaxedJsonEscaping };
 
-    private static readonly JsonDocumentOptions Strict = new() { MaxDepth = 32 };
+    private static readonly JsonDocumentOptions Strict = new() { MaxDepth = 32, AllowDuplicateProperties = false };
 
     private readonly string _text;
 
@@ -37,11 +37,19 @@ public sealed class GuideDocument : IEquatable<GuideDocument>
     /// <summary>The document's JSON object.</summary>
     public JsonElement Root { get; }
 
-    /// <exception cref="JsonException">The text is not JSON, or nests deeper than 32 levels.</exception>
+    /// <exception cref="JsonException">The text is not JSON, nests deeper than 32 levels, names a field twice or holds half a surrogate pair.</exception>
     public static GuideDocument Parse(string json)
     {
-        using var parsed = JsonDocument.Parse(json, Strict);
-        return From(JsonNode.Parse(parsed.RootElement.GetRawText(), documentOptions: Strict));
+        try
+        {
+            using var parsed = JsonDocument.Parse(json, Strict);
+            DecodeAll(parsed.RootElement);
+            return From(JsonNode.Parse(parsed.RootElement.GetRawText(), documentOptions: Strict));
+        }
+        catch (Exception broken) when (broken is InvalidOperationException or ArgumentException)
+        {
+            throw new JsonException("The text is not valid Unicode.", broken);
+        }
     }
 
     /// <summary>The value at a path, or null where there is none.</summary>
@@ -115,6 +123,23 @@ public sealed class GuideDocument : IEquatable<GuideDocument>
     public override bool Equals(object? obj) => Equals(obj as GuideDocument);
 
     public override int GetHashCode() => _text.GetHashCode(StringComparison.Ordinal);
+
+    /// <summary>Decodes every string once, so that none can fail later.</summary>
+    private static void DecodeAll(JsonElement element)
+    {
+        if (element.ValueKind == JsonValueKind.String) _ = element.GetString();
+        if (element.ValueKind == JsonValueKind.Array)
+        {
+            foreach (var item in element.EnumerateArray()) DecodeAll(item);
+        }
+
+        if (element.ValueKind != JsonValueKind.Object) return;
+        foreach (var property in element.EnumerateObject())
+        {
+            _ = property.Name;
+            DecodeAll(property.Value);
+        }
+    }
 
     private static GuideDocument From(JsonNode? node)
     {

@@ -1,3 +1,5 @@
+using GuideModes.Profiles;
+
 namespace GuideModes.Guides;
 
 /// <summary>The ranges a guide document is held to.</summary>
@@ -22,7 +24,7 @@ public static class GuideLimits
     public static NumberRange Alpha { get; } = new(0.5, 1000, "");
 
     /// <summary>No guide reaches further than this from the cover, µm: ten centimetres.</summary>
-    public const double FurthestUm = 1e5;
+    public const double FurthestUm = IndexLaw.FurthestUm;
 
     public const int MostRegions = 200;
 
@@ -33,6 +35,12 @@ public static class GuideLimits
 
     /// <summary>The most smooth pieces in one guide.</summary>
     public const int MostPieces = 10_000;
+
+    /// <summary>Numbers, names and operators in all formulas of a guide together.</summary>
+    public const int MostFormulaNodes = 5000;
+
+    /// <summary>The same, each formula counted once for every piece that its joints (abs, min, max, roots) cut its region into.</summary>
+    public const int MostCompiledNodes = 2 * FormulaLaw.MaximumCompiledSize;
 
     public const int LongestName = 200;
 

@@ -41,9 +41,11 @@ public static class GuideReader
         var polarization = fields.Word("polarization", "TE", "TM") == "TM" ? Polarization.TM : Polarization.TE;
         Wavelength? wavelength = fields.Number("wavelengthUm", GuideLimits.WavelengthUm) is { } um ? Wavelength.FromMicrometres(um) : null;
 
-        var cover = EndMedium(fields, "cover", wavelength, faults);
-        var regions = Regions(fields, wavelength, faults);
-        var substrate = EndMedium(fields, "substrate", wavelength, faults);
+        var formulas = new FormulaReader(faults);
+        var indices = new IndexReader(wavelength, formulas, faults);
+        var cover = EndMedium(fields, "cover", indices);
+        var regions = new RegionReader(new(indices, formulas, faults), faults).Read(fields);
+        var substrate = EndMedium(fields, "substrate", indices);
         return wavelength is { } known && cover is not null && substrate is not null && regions is not null
             ? new(name, known, polarization, cover, [.. regions], substrate)
             : null;
@@ -56,51 +58,6 @@ public static class GuideReader
         return geometry is not ("fiber" or "channel");
     }
 
-    private static IndexSource? EndMedium(ObjectReader fields, string field, Wavelength? wavelength, FaultList faults) =>
-        fields.Find(field, "the medium, such as { \"n\": 1.0 }") is { } value ? new IndexReader(wavelength, faults).Index(value, field) : null;
-
-    private static List<RegionDraft>? Regions(ObjectReader fields, Wavelength? wavelength, FaultList faults)
-    {
-        if (fields.Find("regions", $"a list of 1 to {GuideLimits.MostRegions} regions") is not { } list) return null;
-        if (list.ValueKind != JsonValueKind.Array || list.GetArrayLength() is < 1 or > GuideLimits.MostRegions)
-        {
-            var found = list.ValueKind == JsonValueKind.Array ? $"{list.GetArrayLength()}" : FaultList.Shown(list);
-            faults.Add("regions", $"Expected a list of 1 to {GuideLimits.MostRegions} regions, but found {found}.");
-            return null;
-        }
-
-        var count = list.GetArrayLength();
-        var regions = list.EnumerateArray()
-            .Select((region, i) => Region(region, $"regions[{i}]", i == count - 1, wavelength, faults))
-            .OfType<RegionDraft>()
-            .ToList();
-        return regions.Count == count && IsWithinReach(regions, faults) ? regions : null;
-    }
-
-    private static RegionDraft? Region(JsonElement element, string path, bool isLast, Wavelength? wavelength, FaultList faults)
-    {
-        if (ObjectReader.Open(element, path, "a region { \"thicknessUm\": …, \"index\": { … } }", faults) is not { } fields) return null;
-        fields.RefuseUnknown(["thicknessUm", "index"]);
-        var range = GuideLimits.ThicknessUm;
-        double? thickness = null;
-        var given = fields.Find("thicknessUm", isLast ? $"{range.Description}, or null for a region to infinity" : range.Description);
-        var isThicknessRead = given is { ValueKind: JsonValueKind.Null } && isLast;
-        if (given is { ValueKind: JsonValueKind.Null } && !isLast)
-            faults.Add(fields.At("thicknessUm"), $"Only the last region may run to infinity (null); give {range.Description}.");
-        else if (given is { ValueKind: not JsonValueKind.Null } number)
-            isThicknessRead = (thickness = range.Read(number, fields.At("thicknessUm"), faults)) is not null;
-
-        var law = fields.Find("index", "the law of its index, such as { \"law\": \"uniform\", \"n\": 1.5 }") is { } index
-            ? new LawReader(wavelength, faults).Read(index, fields.At("index"))
-            : null;
-        return isThicknessRead && law is not null ? new(thickness, law) : null;
-    }
-
-    private static bool IsWithinReach(List<RegionDraft> regions, FaultList faults)
-    {
-        var total = regions.Sum(region => region.ThicknessUm ?? 0);
-        if (total <= GuideLimits.FurthestUm) return true;
-        faults.Add("regions", $"The regions are {total} µm thick together; at most {GuideLimits.FurthestUm} µm is allowed.");
-        return false;
-    }
+    private static IndexSource? EndMedium(ObjectReader fields, string field, IndexReader indices) =>
+        fields.Find(field, "the medium, such as { \"n\": 1.0 }") is { } value ? indices.Index(value, field) : null;
 }

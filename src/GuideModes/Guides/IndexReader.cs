@@ -1,12 +1,11 @@
 using System.Text.Json;
 using GuideModes.Materials;
-using GuideModes.Numerics;
 using GuideModes.Profiles;
 
 namespace GuideModes.Guides;
 
 /// <summary>Reads an index: a number, <c>{ "n": … }</c>, <c>{ "material": … }</c> or <c>{ "formula": … }</c> in lambda.</summary>
-internal sealed class IndexReader(Wavelength? wavelength, FaultList faults)
+internal sealed class IndexReader(Wavelength? wavelength, FormulaReader formulas, FaultList faults)
 {
     private const string Expected = "a number, { \"n\": number }, { \"material\": \"fused-silica\" } or { \"formula\": \"…\" } in lambda";
 
@@ -68,34 +67,11 @@ internal sealed class IndexReader(Wavelength? wavelength, FaultList faults)
     {
         fields.RefuseUnknown(["formula"]);
         var path = fields.At("formula");
-        if (FormulaReader.Read(fields.Find("formula", "a formula")!.Value, path, null, faults) is not { } formula) return null;
+        if (formulas.Read(fields.Find("formula", "a formula")!.Value, path, null) is not { } formula) return null;
         if (wavelength is not { } at) return null;
-        var index = formula.Value(0, at.Micrometres);
+        var index = formula.Jet(0, at.Micrometres).Value;
         if (range.Contains(index)) return new(formula);
         faults.Add(path, $"The formula gives {index} at {at.Micrometres} µm; {range.Description} is allowed.");
         return null;
-    }
-}
-
-/// <summary>Reads a formula.</summary>
-internal static class FormulaReader
-{
-    public static Formula? Read(JsonElement value, string path, string? coordinate, FaultList faults)
-    {
-        if (Json.Text(value) is not { } text)
-        {
-            faults.Add(path, $"Expected a formula as text, but found {FaultList.Shown(value)}.");
-            return null;
-        }
-
-        try
-        {
-            return Formula.Parse(text, coordinate);
-        }
-        catch (FormulaException fault)
-        {
-            faults.Add(path, fault.Message);
-            return null;
-        }
     }
 }

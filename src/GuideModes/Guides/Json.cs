@@ -5,31 +5,8 @@ namespace GuideModes.Guides;
 /// <summary>Looking into JSON without exceptions.</summary>
 internal static class Json
 {
-    /// <summary>The text of a string value; null if it is none, or holds half a surrogate pair.</summary>
-    public static string? Text(JsonElement value)
-    {
-        try
-        {
-            return value.ValueKind == JsonValueKind.String ? value.GetString() : null;
-        }
-        catch (InvalidOperationException)
-        {
-            return null;
-        }
-    }
-
-    /// <summary>The name of a property; null if it holds half a surrogate pair.</summary>
-    public static string? Name(JsonProperty property)
-    {
-        try
-        {
-            return property.Name;
-        }
-        catch (InvalidOperationException)
-        {
-            return null;
-        }
-    }
+    /// <summary>The text of a string value; null if it is none.</summary>
+    public static string? Text(JsonElement value) => value.ValueKind == JsonValueKind.String ? value.GetString() : null;
 
     /// <summary>A number, finite; null for anything else, 1e400 included.</summary>
     public static double? Number(JsonElement value) =>

@@ -5,11 +5,9 @@ using GuideModes.Profiles;
 namespace GuideModes.Guides;
 
 /// <summary>Reads a region's <c>index</c> object by the catalogue.</summary>
-internal sealed class LawReader(Wavelength? wavelength, FaultList faults)
+internal sealed class LawReader(IndexReader indices, FormulaReader formulas, FaultList faults)
 {
     private static readonly string[] Names = [.. LawCatalogue.Laws.Select(law => law.Name)];
-
-    private readonly IndexReader _index = new(wavelength, faults);
 
     public IndexLaw? Read(JsonElement element, string path)
     {
@@ -39,9 +37,9 @@ internal sealed class LawReader(Wavelength? wavelength, FaultList faults)
 
     private object? Value(LawParameter parameter, JsonElement given, string path) => parameter.Kind switch
     {
-        LawParameterKind.Index => _index.Index(given, path),
-        LawParameterKind.IndexDifference => _index.Difference(given, path),
-        LawParameterKind.Formula => FormulaReader.Read(given, path, "x", faults),
+        LawParameterKind.Index => indices.Index(given, path),
+        LawParameterKind.IndexDifference => indices.Difference(given, path),
+        LawParameterKind.Formula => formulas.Read(given, path, "x"),
         LawParameterKind.Points => Points(given, path),
         LawParameterKind.Choice => Choice(parameter, given, path),
         _ => parameter.Range.Read(given, path, faults),

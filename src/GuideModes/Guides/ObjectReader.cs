@@ -12,11 +12,7 @@ internal sealed class ObjectReader
     {
         Path = path;
         _faults = faults;
-        foreach (var property in element.EnumerateObject())
-        {
-            if (Json.Name(property) is not { } name) faults.Add(path, "A field name here is not valid Unicode.");
-            else if (!_fields.TryAdd(name, property.Value)) faults.Add(At(name), "This field is given twice; give it once.");
-        }
+        foreach (var property in element.EnumerateObject()) _fields[property.Name] = property.Value;
     }
 
     public string Path { get; }

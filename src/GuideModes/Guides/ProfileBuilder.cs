@@ -13,6 +13,7 @@ internal sealed class ProfileBuilder(GuideDraft draft, FaultList faults)
         [.. Enumerable.Range(0, SamplesPerPiece).Select(i => 0.5 - 0.5 * Math.Cos(Math.PI * i / (SamplesPerPiece - 1)))];
 
     private readonly List<SmoothPiece> _pieces = [];
+    private int _compiledNodes;
 
     /// <summary>The profile, or null and at least one fault.</summary>
     public IndexProfile? Build()
@@ -70,16 +71,23 @@ internal sealed class ProfileBuilder(GuideDraft draft, FaultList faults)
     private bool Fill(RegionDraft region, int number, Interval extent)
     {
         var path = $"regions[{number}]";
+        if (!(extent.Length > 0)) return true;
         if (region.Law.Misfit(extent, region.ThicknessUm is null, draft.Wavelength) is { } misfit)
         {
             faults.Add($"{path}.index.{misfit.Path}", misfit.Message);
             return true;
         }
 
-        if (!(extent.Length > 0)) return true;
         var pieces = region.Law.Pieces(extent, number, draft.Wavelength).ToArray();
         Check(pieces, region.Law.Landmarks(extent).ToArray(), $"{path}.index");
         _pieces.AddRange(pieces);
+        _compiledNodes += pieces.Length * region.Law.FormulaSize;
+        if (_compiledNodes > GuideLimits.MostCompiledNodes)
+        {
+            faults.Add("regions", "The formulas change branch (abs, min, max, roots) too often for their length; use shorter formulas or fewer branches.");
+            return false;
+        }
+
         if (_pieces.Count <= GuideLimits.MostPieces) return true;
         faults.Add("regions", $"The guide has more than {GuideLimits.MostPieces} smooth pieces (table intervals and the like); at most {GuideLimits.MostPieces} are allowed.");
         return false;

@@ -60,9 +60,9 @@ public sealed class Formula
     /// <summary>The compiled value with derivatives, for loops.</summary>
     internal Func<double, double, Jet> Derivatives => _jet.Value;
 
-    /// <summary>The expressions at whose zeros the formula passes from one branch of an abs, min or max to another.</summary>
-    internal ImmutableArray<FormulaNode> Switches =>
-        [.. Root.Descendants().Select(node => node.SwitchesAt).OfType<FormulaNode>().Where(node => !node.IsConstant)];
+    /// <summary>The expressions at whose zeros the formula is not smooth: it changes branch (abs, min, max) or meets the end of a root.</summary>
+    internal ImmutableArray<FormulaNode> Joints =>
+        [.. Root.Descendants().SelectMany(node => new[] { node.SwitchesAt, node.SingularAt }).OfType<FormulaNode>().Where(node => !node.IsConstant)];
 
     /// <summary>The numbers that stand in it: likely places of its features.</summary>
     internal IEnumerable<double> Numbers => Root.Descendants().OfType<NumberNode>().Select(node => node.Value).Distinct();

@@ -22,6 +22,9 @@ internal abstract record FormulaNode
     /// <summary>Where this is zero, the node itself passes from one branch to another; null for a smooth node.</summary>
     public virtual FormulaNode? SwitchesAt => null;
 
+    /// <summary>Where this is zero, the node has no derivatives: the argument of a root; null for a node that has them everywhere.</summary>
+    public virtual FormulaNode? SingularAt => null;
+
     public abstract double Evaluate(double x, double lambda);
 
     /// <summary>The same node without branches: each abs, min and max replaced by the branch it takes at (x, λ).</summary>
@@ -132,6 +135,9 @@ internal sealed record PowerNode(FormulaNode Base, FormulaNode Exponent) : Formu
 
     public override IEnumerable<FormulaNode> Children => [Base, Exponent];
 
+    public override FormulaNode? SingularAt =>
+        Exponent.IsConstant && double.IsInteger(Exponent.Evaluate(0, 0)) ? null : Base;
+
     public override double Evaluate(double x, double lambda)
     {
         var value = Base.Evaluate(x, lambda);
@@ -170,6 +176,8 @@ internal sealed record CallNode(FormulaFunction Function, IReadOnlyList<FormulaN
         "min" or "max" => new ArithmeticNode('-', Arguments[0], Arguments[1]),
         _ => null,
     };
+
+    public override FormulaNode? SingularAt => Function.Name == "sqrt" ? Arguments[0] : null;
 
     public override double Evaluate(double x, double lambda) => Arguments.Count == 1
         ? Function.OfOne!(Arguments[0].Evaluate(x, lambda))

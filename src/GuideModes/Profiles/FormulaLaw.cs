@@ -4,18 +4,27 @@ namespace GuideModes.Profiles;
 
 /// <summary>n (or, with <see cref="GradedQuantity.IndexSquared"/>, n²) is a formula in x and lambda.</summary>
 /// <remarks>
-/// The region is cut where an abs, min or max changes branch, and each piece keeps its own branch up to its ends.
-/// Those places, and where a region to infinity may be cut, are found by sampling (evenly, by doubling distance and at every number in the formula)
+/// The region is cut where an abs, min or max changes branch, and each piece keeps its own branch up to its ends; it is also cut where the argument of a
+/// root is zero, and there, at a piece's end, derivatives may be unbounded. Those places, and where a region to infinity may be cut, are found by sampling (evenly, by doubling distance and at every number in the formula)
 /// and bisection: two changes between neighbouring samples can be missed.
 /// </remarks>
 public sealed record FormulaLaw(GradedQuantity Quantity, Formula Formula) : IndexLaw
 {
-    /// <summary>How often a formula may change branch in one region.</summary>
-    public const int MaximumBranchChanges = 200;
+    /// <summary>How often a formula may change branch, or a root in it end, within one region.</summary>
+    public const int MaximumJoints = 200;
+
+    /// <summary>How many abs, min, max and roots a formula may have.</summary>
+    public const int MaximumJointKinds = 20;
+
+    /// <summary>How large the arguments of all of them may be together.</summary>
+    public const int MaximumJointSize = 500;
+
+    /// <summary>The formula's size times the pieces that its joints cut the region into.</summary>
+    public const int MaximumCompiledSize = 20_000;
 
     private const int Samples = 2000;
 
-    public override double? Limit(Wavelength wavelength) => Index(FarAway, wavelength);
+    public override double? Limit(Wavelength wavelength) => Index(FurthestUm, wavelength);
 
     public override double? SettlesAt(double start, double furthest, Wavelength wavelength)
     {
@@ -31,24 +40,32 @@ public sealed record FormulaLaw(GradedQuantity Quantity, Formula Formula) : Inde
             : Bisection.FirstTrue(IsSettled, samples[lastUnsettled], samples[lastUnsettled + 1]);
     }
 
-    public override Fault? Misfit(Interval extent, bool isUnbounded, Wavelength wavelength) =>
-        BranchChanges(extent, wavelength).Count() > MaximumBranchChanges
-            ? new("n", $"The formula changes branch (abs, min, max) more than {MaximumBranchChanges} times in the region; at most {MaximumBranchChanges} are allowed.")
+    public override Fault? Misfit(Interval extent, bool isUnbounded, Wavelength wavelength)
+    {
+        if (Formula.Joints.Length > MaximumJointKinds)
+            return new("n", $"The formula has {Formula.Joints.Length} abs, min, max and roots of x; at most {MaximumJointKinds} are allowed.");
+        if (Formula.Joints.Sum(node => node.Size) > MaximumJointSize)
+            return new("n", $"What stands inside abs, min, max and roots is too long: at most {MaximumJointSize} numbers, names and operators are allowed there together.");
+        var joints = Joints(extent, wavelength).Count();
+        if (joints > MaximumJoints)
+            return new("n", $"The formula changes branch (abs, min, max, roots) more than {MaximumJoints} times in the region; at most {MaximumJoints} are allowed.");
+        return (joints + 1) * FormulaSize > MaximumCompiledSize
+            ? new("n", $"The formula changes branch (abs, min, max, roots) {joints} times, too often for its length; use a shorter formula or several regions.")
             : null;
+    }
 
     public override IEnumerable<SmoothPiece> Pieces(Interval extent, int region, Wavelength wavelength)
     {
         var lambda = wavelength.Micrometres;
-        if (Formula.Switches.IsEmpty) return [new FormulaPiece(extent, region, Quantity, Formula, lambda)];
+        if (Formula.Joints.IsEmpty) return [new FormulaPiece(extent, region, Quantity, Formula, lambda)];
         var branches = new Dictionary<FormulaNode, Formula>();
-        return [.. extent.SplitAt(BranchChanges(extent, wavelength).Take(MaximumBranchChanges + 1)).Select(part =>
+        return [.. extent.SplitAt(Joints(extent, wavelength).Take(MaximumJoints + 1)).Select(part =>
             new FormulaPiece(part, region, Quantity, BranchAt(part.Middle, lambda, branches), lambda))];
     }
 
-    internal override IEnumerable<double> Landmarks(Interval extent) => EvenSamples(extent);
+    internal override int FormulaSize => Formula.Root.Size;
 
-    /// <summary>The coordinate that stands for infinity: the furthest a region may reach.</summary>
-    private static double FarAway => 1e5;
+    internal override IEnumerable<double> Landmarks(Interval extent) => EvenSamples(extent);
 
     private double Index(double x, Wavelength wavelength) => Math.Sqrt(IndexSquared(x, wavelength));
 
@@ -63,12 +80,12 @@ public sealed record FormulaLaw(GradedQuantity Quantity, Formula Formula) : Inde
         return branch;
     }
 
-    private IEnumerable<double> BranchChanges(Interval extent, Wavelength wavelength)
+    private IEnumerable<double> Joints(Interval extent, Wavelength wavelength)
     {
-        var switches = Formula.Switches;
-        if (switches.IsEmpty) return [];
+        var kinds = Formula.Joints;
+        if (kinds.IsEmpty) return [];
         var samples = EvenSamples(extent);
-        return switches.SelectMany(node => SignChanges(x => node.Evaluate(x, wavelength.Micrometres), samples)).Order();
+        return kinds.SelectMany(node => SignChanges(x => node.Evaluate(x, wavelength.Micrometres), samples)).Order();
     }
 
     private static IEnumerable<double> SignChanges(Func<double, double> function, double[] samples)
@@ -85,16 +102,28 @@ public sealed record FormulaLaw(GradedQuantity Quantity, Formula Formula) : Inde
 
     private static int Sign(double value) => value > 0 ? 1 : value < 0 ? -1 : 0;
 
-    private double[] EvenSamples(Interval extent) =>
-    [
-        .. Enumerable.Range(0, Samples + 1).Select(i => i == Samples ? extent.End : extent.Start + extent.Length * i / Samples)
-            .Concat(Formula.Numbers.Where(extent.Contains)).Distinct().Order(),
-    ];
+    private double[] EvenSamples(Interval extent)
+    {
+        var samples = new List<double>(Samples + 20);
+        for (var i = 0; i < Samples; i++) samples.Add(extent.Start + extent.Length * i / Samples);
+        samples.Add(extent.End);
+        return WithNumbers(samples, extent);
+    }
 
     private double[] TailSamples(double start, double furthest)
     {
-        var even = Enumerable.Range(0, Samples).Select(i => start + 0.25 * i);
-        var doubling = Enumerable.Range(0, Samples).Select(i => start + (furthest - start) * Math.Pow(2, -17.0 * i / Samples));
-        return [.. even.Concat(doubling).Concat(Formula.Numbers).Where(x => x >= start && x <= furthest).Distinct().Order()];
+        var samples = new List<double>(2 * Samples + 20);
+        var tail = new Interval(start, furthest);
+        for (var i = 0; i < Samples; i++) samples.Add(Math.Min(start + 0.25 * i, furthest));
+        for (var i = 0; i < Samples; i++) samples.Add(start + tail.Length * Math.Pow(2, -17.0 * i / Samples));
+        return WithNumbers(samples, tail);
+    }
+
+    /// <summary>With the numbers that stand in the formula, ascending: a feature is likely where a number points.</summary>
+    private double[] WithNumbers(List<double> samples, Interval extent)
+    {
+        samples.AddRange(Formula.Numbers.Where(extent.Contains));
+        samples.Sort();
+        return [.. samples];
     }
 }

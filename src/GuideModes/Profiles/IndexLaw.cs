@@ -4,6 +4,9 @@ namespace GuideModes.Profiles;
 /// <remarks>Coordinates are global: x = 0 is the cover interface whatever regions come before.</remarks>
 public abstract record IndexLaw
 {
+    /// <summary>No region reaches further than this from the cover, µm; for a formula it stands for infinity.</summary>
+    public const double FurthestUm = 1e5;
+
     /// <summary>n² over a stretch of positive length, as contiguous smooth pieces from left to right.</summary>
     public abstract IEnumerable<SmoothPiece> Pieces(Interval extent, int region, Wavelength wavelength);
 
@@ -18,6 +21,9 @@ public abstract record IndexLaw
 
     /// <summary>What keeps the law from filling a stretch: the parameter at fault and a sentence; null if nothing does.</summary>
     public virtual Fault? Misfit(Interval extent, bool isUnbounded, Wavelength wavelength) => null;
+
+    /// <summary>How many formula nodes each piece of the law compiles; 0 for a law without formula.</summary>
+    internal virtual int FormulaSize => 0;
 
     /// <summary>Coordinates at which a check of the law on this stretch should look, beside an even sampling.</summary>
     internal virtual IEnumerable<double> Landmarks(Interval extent) => [];

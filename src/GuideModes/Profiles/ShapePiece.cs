@@ -30,8 +30,14 @@ internal sealed class ShapePiece<TShape>(
 
     public override Jet Jet(double x)
     {
-        var s = new Jet((x - origin) / length, 1 / length, 0, 0, 0);
-        var value = basis + delta * shape.Jet(s);
+        var g = shape.Derivatives((x - origin) / length);
+        var scale = _delta / length;
+        var value = new Jet(
+            _base + _delta * g.G,
+            scale * g.G1,
+            scale / length * g.G2,
+            scale / (length * length) * g.G3,
+            basis.DLambda + delta.DLambda * g.G);
         return _gradesIndex ? JetMath.Square(value) : value;
     }
 }

@@ -2,12 +2,15 @@ using GuideModes.Numerics;
 
 namespace GuideModes.Profiles;
 
-/// <summary>A dimensionless profile shape g(s), as a number and with derivatives; a struct, so that the piece that uses it is compiled for it.</summary>
+/// <summary>g and its first three derivatives at one s.</summary>
+internal readonly record struct ShapeDerivatives(double G, double G1, double G2, double G3);
+
+/// <summary>A dimensionless profile shape g(s), alone and with derivatives; a struct, so that the piece that uses it is compiled for it.</summary>
 internal interface IShape
 {
     double Value(double s);
 
-    Jet Jet(Jet s);
+    ShapeDerivatives Derivatives(double s);
 }
 
 /// <summary>g = s.</summary>
@@ -15,7 +18,7 @@ internal readonly struct LinearShape : IShape
 {
     public double Value(double s) => s;
 
-    public Jet Jet(Jet s) => s;
+    public ShapeDerivatives Derivatives(double s) => new(s, 1, 0, 0);
 }
 
 /// <summary>g = s².</summary>
@@ -23,7 +26,7 @@ internal readonly struct SquareShape : IShape
 {
     public double Value(double s) => s * s;
 
-    public Jet Jet(Jet s) => JetMath.Square(s);
+    public ShapeDerivatives Derivatives(double s) => new(s * s, 2 * s, 2, 0);
 }
 
 /// <summary>g = |s|^alpha on one side of the centre: sign +1 for s ≥ 0, −1 for s ≤ 0, so that the slope at s = 0 is that side's.</summary>
@@ -31,10 +34,10 @@ internal readonly struct PowerShape(double alpha, double sign) : IShape
 {
     public double Value(double s) => Math.Pow(Math.Abs(s), alpha);
 
-    public Jet Jet(Jet s)
+    public ShapeDerivatives Derivatives(double s)
     {
-        var distance = s * sign;
-        return JetMath.Pow(distance with { Value = Math.Abs(s.Value) }, alpha);
+        var g = JetMath.Pow(Jet.Coordinate(Math.Abs(s)), alpha);
+        return new(g.Value, sign * g.D1, g.D2, sign * g.D3);
     }
 }
 
@@ -43,7 +46,11 @@ internal readonly struct EvenPowerShape(double alpha) : IShape
 {
     public double Value(double s) => Math.Pow(s, alpha);
 
-    public Jet Jet(Jet s) => JetMath.Pow(s, alpha);
+    public ShapeDerivatives Derivatives(double s)
+    {
+        var g = JetMath.Pow(Jet.Coordinate(s), alpha);
+        return new(g.Value, g.D1, g.D2, g.D3);
+    }
 }
 
 /// <summary>g = exp(−s²).</summary>
@@ -51,7 +58,11 @@ internal readonly struct GaussianShape : IShape
 {
     public double Value(double s) => Math.Exp(-s * s);
 
-    public Jet Jet(Jet s) => JetMath.Exp(-JetMath.Square(s));
+    public ShapeDerivatives Derivatives(double s)
+    {
+        var g = Math.Exp(-s * s);
+        return new(g, -2 * s * g, (4 * s * s - 2) * g, (12 - 8 * s * s) * s * g);
+    }
 }
 
 /// <summary>g = exp(−s).</summary>
@@ -59,37 +70,53 @@ internal readonly struct ExponentialShape : IShape
 {
     public double Value(double s) => Math.Exp(-s);
 
-    public Jet Jet(Jet s) => JetMath.Exp(-s);
+    public ShapeDerivatives Derivatives(double s)
+    {
+        var g = Math.Exp(-s);
+        return new(g, -g, g, -g);
+    }
 }
 
 /// <summary>g = erfc(s).</summary>
 internal readonly struct ErfcShape : IShape
 {
+    private const double TwoOverRootPi = 1.1283791670955125739;
+
     public double Value(double s) => RealMath.Erfc(s);
 
-    public Jet Jet(Jet s) => JetMath.Erfc(s);
+    public ShapeDerivatives Derivatives(double s)
+    {
+        var slope = -TwoOverRootPi * Math.Exp(-s * s);
+        return new(RealMath.Erfc(s), slope, -2 * s * slope, (4 * s * s - 2) * slope);
+    }
 }
 
-/// <summary>g = sech²(s).</summary>
+/// <summary>g = sech²(s); with t = tanh s, g′ = −2tg and t² = 1 − g.</summary>
 internal readonly struct SechSquaredShape : IShape
 {
     public double Value(double s) => RealMath.Square(RealMath.Sech(s));
 
-    public Jet Jet(Jet s) => JetMath.Square(JetMath.Sech(s));
+    public ShapeDerivatives Derivatives(double s)
+    {
+        var g = Value(s);
+        var slope = -2 * Math.Tanh(s) * g;
+        return new(g, slope, (4 - 6 * g) * g, (4 - 12 * g) * slope);
+    }
 }
 
-/// <summary>g = 1/(1 + exp(s)): the Fermi step.</summary>
+/// <summary>g = 1/(1 + exp(s)): the Fermi step; g′ = −g(1 − g).</summary>
 internal readonly struct FermiShape : IShape
 {
     public double Value(double s) => 1 / (1 + Math.Exp(s));
 
-    public Jet Jet(Jet s)
+    public ShapeDerivatives Derivatives(double s)
     {
-        var e = Math.Exp(-Math.Abs(s.Value));
-        var slope = -e / ((1 + e) * (1 + e));
-        var g = Value(s.Value);
+        var e = Math.Exp(-Math.Abs(s));
+        var share = 1 / (1 + e);
+        var g = s < 0 ? share : e * share;
+        var slope = -e * share * share;
         var curvature = slope * (2 * g - 1);
-        return s.Compose(g, slope, curvature, curvature * (2 * g - 1) + 2 * slope * slope);
+        return new(g, slope, curvature, curvature * (2 * g - 1) + 2 * slope * slope);
     }
 }
 
@@ -98,9 +125,6 @@ internal readonly struct CubicShape(double c1, double c2, double c3) : IShape
 {
     public double Value(double s) => ((c3 * s + c2) * s + c1) * s;
 
-    public Jet Jet(Jet s) => s.Compose(
-        Value(s.Value),
-        (3 * c3 * s.Value + 2 * c2) * s.Value + c1,
-        6 * c3 * s.Value + 2 * c2,
-        6 * c3);
+    public ShapeDerivatives Derivatives(double s) =>
+        new(Value(s), (3 * c3 * s + 2 * c2) * s + c1, 6 * c3 * s + 2 * c2, 6 * c3);
 }

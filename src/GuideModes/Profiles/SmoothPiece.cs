@@ -6,7 +6,7 @@ namespace GuideModes.Profiles;
 /// <remarks>
 /// Implementers supply n² alone (<see cref="IndexSquared"/>, the fast path) and n² with its derivatives
 /// (<see cref="Jet"/>), both for coordinates in or at the ends of <see cref="Extent"/>, finite and without
-/// allocation. A power law may have an unbounded higher derivative at an end of its piece.
+/// allocation. A power law, or a root in a formula, may have an unbounded derivative at an end of its piece.
 /// Instances are immutable and safe to share between threads.
 /// </remarks>
 public abstract class SmoothPiece(Interval extent, int region)

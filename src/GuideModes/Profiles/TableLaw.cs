@@ -51,8 +51,6 @@ public sealed record TableLaw(GradedQuantity Quantity, TableInterpolation Interp
         }
     }
 
-    internal override IEnumerable<double> Landmarks(Interval extent) => Points.Select(point => point.XUm);
-
     private static bool Reaches(double far, double near) => far >= near || Splitting.AreOne(far, near);
 
     private UniformPiece Held(Interval part, int region) => new(part, region, Points[^1].N * Points[^1].N);

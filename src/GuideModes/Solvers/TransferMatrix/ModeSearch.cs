@@ -10,6 +10,12 @@ internal sealed class ModeSearch
 {
     private const int MaximumSweeps = 200;
 
+    /// <summary>
+    /// In a single well Θ bends on the scale of a radian, so that Newton's next step is smaller than this one by about the angle
+    /// still missing, and from here one step lands within rounding. Between coupled wells Θ may bend within a splitting.
+    /// </summary>
+    private const double LastAngle = 1e-7;
+
     /// <summary>The match moves when the mode is this much stronger elsewhere (as a logarithm of amplitude squared).</summary>
     private const double WorthMoving = 4;
 
@@ -27,7 +33,7 @@ internal sealed class ModeSearch
         _low = new double[Count];
         _high = new double[Count];
         Array.Fill(_low, lowest);
-                _peak = Array.IndexOf(sweep.Mesh.Mean, sweep.Mesh.Mean.Min());
+        _peak = Array.IndexOf(sweep.Mesh.Mean, sweep.Mesh.Mean.Min());
         _logs = new double[sweep.Mesh.Count + 1];
     }
 
@@ -66,6 +72,7 @@ internal sealed class ModeSearch
         var energy = Guess(order, guess);
         var match = _peak;
         var (found, error) = Solve(order, energy, match);
+        if (HasOneWell(found)) return new(found, error, match, _scale);
         var better = StrongestPoint(found, match);
         if (better == match) return new(found, error, match, _scale);
         var (refined, refinedError) = Solve(order, found, better);
@@ -82,6 +89,7 @@ internal sealed class ModeSearch
     private (double Energy, double Error) Solve(int order, double energy, int match)
     {
         var mean = _sweep.Mesh.Mean[match];
+        var lastAngle = HasOneWell(energy) ? LastAngle : 0;
         var last = double.PositiveInfinity;
         var step = double.PositiveInfinity;
         for (var i = 0; i < MaximumSweeps; i++)
@@ -93,7 +101,8 @@ internal sealed class ModeSearch
             step = residual / rate;
             var next = energy + step;
             var resolution = 2.3e-16 * Math.Abs(energy) + 1e-300;
-            if (Math.Abs(step) <= resolution) return (next, Math.Abs(step));
+            if (Math.Abs(step) <= resolution || Math.Abs(residual) < lastAngle)
+                return (next, Math.Abs(step * residual) + resolution);
             var slow = Math.Abs(residual) > 0.5 * last;
             if (!(next > _low[order] && next < _high[order]) || slow) next = 0.5 * (_low[order] + _high[order]);
             if (_high[order] - _low[order] <= 2 * resolution) return (next, _high[order] - _low[order]);
@@ -127,6 +136,20 @@ internal sealed class ModeSearch
     {
         var sign = value < 0 ? -1 : 1;
         return Math.Atan2(scale * Math.Abs(value), sign * slope);
+    }
+
+    /// <summary>True when the field oscillates in one stretch only, that of the highest index, where the match stands already.</summary>
+    private bool HasOneWell(double energy)
+    {
+        var stretches = 0;
+        var oscillates = false;
+        foreach (var mean in _sweep.Mesh.Mean)
+        {
+            if (mean < energy && !oscillates) stretches++;
+            oscillates = mean < energy;
+        }
+
+        return stretches <= 1;
     }
 
     /// <summary>The step start at which the mode is largest: where the product of the two decaying solutions is.</summary>

@@ -1,5 +1,4 @@
 using System.Collections.Immutable;
-using System.Runtime.Intrinsics;
 
 namespace GuideModes.Solvers.TransferMatrix;
 
@@ -7,18 +6,15 @@ namespace GuideModes.Solvers.TransferMatrix;
 /// <remarks>No modes with <see cref="SearchOutcome.Complete"/> says that nothing is guided. Safe to read from several threads.</remarks>
 public sealed class TransferMatrixSolution
 {
-    private readonly ModeProblem _problem;
     private readonly ImmutableArray<ModeSearch.Found> _found;
     private readonly StepMesh? _mesh;
 
     internal TransferMatrixSolution(
-        ModeProblem problem,
         SearchOutcome outcome,
         ImmutableArray<GuidedMode> modes,
         ImmutableArray<ModeSearch.Found> found,
         StepMesh? mesh = null)
     {
-        _problem = problem;
         Outcome = outcome;
         Modes = modes;
         _found = found;
@@ -34,80 +30,22 @@ public sealed class TransferMatrixSolution
     /// <param name="order">m, from 0.</param>
     /// <param name="xUm">Coordinates, µm.</param>
     /// <exception cref="ArgumentOutOfRangeException">There is no such mode.</exception>
-    public SampledField Field(int order, ImmutableArray<double> xUm)
-    {
-        if (order < 0 || order >= Modes.Length || _mesh is null)
-            throw new ArgumentOutOfRangeException(nameof(order), order, $"The guide has {Modes.Length} modes, counted from 0.");
-        var found = _found[order];
-        var sweep = new Sweep(_mesh);
-        var field = MatchedField.Join(sweep, found);
-        var sampler = new Sampler(_mesh, sweep, field, found.Energy);
-        var values = ImmutableArray.CreateBuilder<double>(xUm.Length);
-        var amplitude = 1 / Math.Sqrt(field.Norm);
-        foreach (var x in xUm) values.Add(amplitude * sampler.Transverse(x) * Factor(x));
-        return new(xUm, values.MoveToImmutable());
-    }
+    public SampledField Field(int order, ImmutableArray<double> xUm) => Fields([order], xUm)[0];
 
-    /// <summary>From u to the transverse field: 1 for E (TE), n for H (TM); at a joint, as u is there, of the right side.</summary>
-    private double Factor(double x)
+    /// <summary>The fields of several modes at the same coordinates: much cheaper than one by one.</summary>
+    /// <param name="orders">Mode numbers, from 0.</param>
+    /// <param name="xUm">Coordinates, µm.</param>
+    /// <exception cref="ArgumentOutOfRangeException">There is no such mode.</exception>
+    public ImmutableArray<SampledField> Fields(ImmutableArray<int> orders, ImmutableArray<double> xUm)
     {
-        if (_problem.Polarization == Polarization.TE) return 1;
-        var profile = _problem.Profile;
-        if (x < profile.Extent.Start) return profile.Cover.Index;
-        if (x >= profile.Extent.End) return profile.Substrate.Index;
-        foreach (var piece in profile.Pieces)
+        foreach (var order in orders)
         {
-            if (x < piece.Extent.End) return Math.Sqrt(piece.IndexSquared(x));
+            if (order < 0 || order >= Modes.Length)
+                throw new ArgumentOutOfRangeException(nameof(orders), order, $"The guide has {Modes.Length} modes, counted from 0.");
         }
 
-        return profile.Substrate.Index;
-    }
-
-    /// <summary>u anywhere, from the states at the steps' starts.</summary>
-    private sealed class Sampler(StepMesh mesh, Sweep sweep, MatchedField field, double energy)
-    {
-        private readonly StepSeries _series = new();
-        private readonly Vector256<double>[] _coefficients = new Vector256<double>[StepMesh.Stride];
-        private readonly double[] _f = new double[StepFunctions.Count];
-        private int _built = -1;
-        private bool _graded;
-
-        public double Transverse(double x)
-        {
-            if (x < mesh.Start[0])
-            {
-                var (edge, log) = field.At(0);
-                var (u, _) = mesh.Joints[0].Backward(edge.Value, edge.Slope);
-                return u * Math.Exp(log + sweep.CoverDecay(energy) * (x - mesh.Start[0]));
-            }
-
-            if (x >= mesh.Start[mesh.Count])
-            {
-                var (edge, log) = field.At(mesh.Count);
-                return edge.Value * Math.Exp(log - sweep.SubstrateDecay(energy) * (x - mesh.Start[mesh.Count]));
-            }
-
-            var at = Array.BinarySearch(mesh.Start, x);
-            return InStep(at >= 0 ? at : ~at - 1, x);
-        }
-
-        private double InStep(int step, double x)
-        {
-            if (step != _built)
-            {
-                _graded = mesh.Series(step, _series);
-                _built = step;
-            }
-
-            var h = mesh.Length[step];
-            var t = (x - mesh.Start[step]) / h;
-            if (_graded) _series.Coefficients(t, _coefficients);
-            else StepSeries.UniformCoefficients(t, _coefficients);
-            var scale = StepFunctions.Evaluate((mesh.Mean[step] - energy) * h * h * t * t, _f);
-            var sum = Vector256<double>.Zero;
-            for (var m = 0; m < StepMesh.Stride; m++) sum += _coefficients[m] * _f[m];
-            var (state, log) = field.At(step);
-            return (sum[0] * state.Value + sum[2] * state.Slope * h) * Math.Exp(log + scale);
-        }
+        if (_mesh is null || orders.IsEmpty) return [];
+        var sampler = new FieldSampler(_mesh, xUm);
+        return [.. orders.Select(order => sampler.Sample(_found[order]))];
     }
 }

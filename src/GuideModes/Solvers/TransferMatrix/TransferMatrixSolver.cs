@@ -22,28 +22,25 @@ public sealed record TransferMatrixSolver(double IndexTolerance = 2e-13, int Max
         ArgumentNullException.ThrowIfNull(problem);
         (problem, var capError) = SingularEnds.Capped(problem);
         var plan = StepPlan.For(problem, IndexTolerance, cancellation);
-        if (!plan.IsComplete) return new(problem, SearchOutcome.Unresolved, [], []);
+        if (!plan.IsComplete) return new(SearchOutcome.Unresolved, [], []);
+        if (plan.LowestPotential >= 0) return new(SearchOutcome.Complete, [], []);
         var coarse = new Sweep(new StepMesh(plan, problem));
-        if (plan.LowestPotential >= 0) return new(problem, SearchOutcome.Complete, [], []);
         var search = new ModeSearch(coarse, plan.LowestPotential);
-        if (search.Count > MaximumModes) return new(problem, SearchOutcome.TooManyModes, [], []);
-        if (search.Count == 0) return new(problem, SearchOutcome.Complete, [], []);
+        if (search.Count > MaximumModes) return new(SearchOutcome.TooManyModes, [], []);
+        if (search.Count == 0) return new(SearchOutcome.Complete, [], []);
 
         var fine = new Sweep(new StepMesh(plan.Halved(), problem));
         var integrals = new ModeIntegrals(coarse);
-        var modes = ImmutableArray.CreateBuilder<GuidedMode>(search.Count);
-        var tails = ImmutableArray.CreateBuilder<ModeSearch.Found>(search.Count);
-        var all = search.FindAll(cancellation);
-        for (var m = 0; m < all.Length; m++)
+        var found = search.FindAll(cancellation);
+        var modes = ImmutableArray.CreateBuilder<GuidedMode>(found.Length);
+        for (var m = 0; m < found.Length; m++)
         {
             cancellation.ThrowIfCancellationRequested();
-            var found = all[m];
-            var (energy, step) = ModeSearch.Polish(fine, m, found.Energy, 2 * found.Match, found.Scale);
-            modes.Add(integrals.Describe(m, found, Index(energy, step + found.Error, problem.Profile, fine.Mesh.Count, capError)));
-            tails.Add(found with { Energy = energy });
+            var (energy, step) = ModeSearch.Polish(fine, m, found[m].Energy, 2 * found[m].Match, found[m].Scale);
+            modes.Add(integrals.Describe(m, found[m], Index(energy, step + found[m].Error, problem.Profile, fine.Mesh.Count, capError)));
         }
 
-        return new(problem, SearchOutcome.Complete, modes.MoveToImmutable(), tails.MoveToImmutable(), coarse.Mesh);
+        return new(SearchOutcome.Complete, modes.MoveToImmutable(), [.. found], coarse.Mesh);
     }
 
     /// <summary>n_eff from E, with the two meshes' difference and a floor for what rounding does over many steps.</summary>

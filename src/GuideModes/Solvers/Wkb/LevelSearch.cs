@@ -10,9 +10,9 @@ internal readonly record struct LevelSample(double Level, double Number, double 
 /// </remarks>
 internal static class LevelSearch
 {
-    private const int MostSteps = 100;
+    private const int MostSteps = 60;
 
-    public static LevelSample Find(Func<double, LevelSample> number, double target, double lower, double upper, double guess)
+    public static LevelSample Find(Func<double, LevelSample> number, double target, double lower, double upper, double guess, double tolerance = 1e-13)
     {
         var level = guess > lower && guess < upper ? guess : 0.5 * (lower + upper);
         LevelSample last = default;
@@ -24,7 +24,7 @@ internal static class LevelSearch
             else upper = level;
             var next = level - excess / Slope(sample, last, step);
             if (!(next > lower && next < upper)) next = excess == 0 ? level : 0.5 * (lower + upper);
-            if (Math.Abs(next - level) <= 3e-16 * level || Math.Abs(excess) <= 2e-15 * (1 + Math.Abs(target)) || step == MostSteps)
+            if (Math.Abs(next - level) <= 3e-16 * level || Math.Abs(excess) <= tolerance * (1 + Math.Abs(target)) || step == MostSteps)
                 return sample;
             (last, level) = (sample, next);
         }

@@ -1,14 +1,23 @@
 namespace GuideModes.Solvers.Wkb;
 
 /// <summary>One search for all modes of one profile.</summary>
+/// <remarks>
+/// Method: the wells and how they join as n_eff falls (<see cref="WellTree"/>); in each the levels at which ν = m with uniform ends;
+/// from there the higher orders (<see cref="OrderChoice"/>). A well that two others joined to make goes on counting
+/// where they stopped, so that every mode number appears once.
+/// </remarks>
 internal sealed class ModeSearch
 {
     /// <summary>How near the end of its range a well is looked at, as a share of the range.</summary>
     private const double Inset = 1e-12;
 
+    /// <summary>The same for the second order, whose integrals rounding spoils earlier.</summary>
+    private const double SecondOrderInset = 1e-9;
+
     private readonly ProfileMap map;
     private readonly WellFinder finder;
     private readonly WellPhase phase;
+    private readonly OrderChoice orders;
     private readonly int mostModes;
     private readonly CancellationToken cancellation;
     private readonly List<FoundMode> found = [];
@@ -18,6 +27,7 @@ internal sealed class ModeSearch
         map = new(problem);
         finder = new(map);
         phase = new(map, finder, new(map));
+        orders = new(map, finder, phase);
         (this.mostModes, this.cancellation) = (mostModes, cancellation);
     }
 
@@ -26,70 +36,45 @@ internal sealed class ModeSearch
         var total = 0.0;
         foreach (var root in WellTree.Build(map))
         {
-            Search(root);
-            total += Math.Max(0, 1 + AtLower(root).Number);
+            Search(root, out var number);
+            total += Math.Max(0, 1 + number);
             if (found.Count > mostModes) return new([], total, SearchOutcome.TooManyModes);
         }
 
         found.Sort((a, b) => b.Level.CompareTo(a.Level));
-        return new([.. found.Select(Report)], total, SearchOutcome.Complete);
+        return new([.. new CoupledWells(finder, phase).Report(found)], total, SearchOutcome.Complete);
     }
 
-    private LevelSample AtLower(WellNode node)
+    /// <summary>ν at the lower end of a well's range, to second order where that is a small correction.</summary>
+    private double NumberAtLower(WellNode node, double first)
     {
-        var level = node.Lower + Inset * (node.Upper - node.Lower);
-        return Sample(node, level, PhaseKind.Uniform);
+        var level = Just(node, SecondOrderInset);
+        var correction = orders.Sample(node, level, PhaseKind.SecondOrder).Number - orders.Sample(node, level, PhaseKind.Uniform).Number;
+        return Math.Abs(correction) < OrderChoice.LargestCorrection / Math.PI ? first + correction : first;
     }
 
-    private LevelSample Sample(WellNode node, double level, PhaseKind kind)
-    {
-        finder.Find(level);
-        var well = finder.Holding(node.Anchor);
-        if (well < 0) return new(level, -1, -1, 0);
-        var value = phase.Evaluate(level, well, kind);
-        return new(level, value.Number, -map.Wavenumber / (2 * Math.PI) * value.InverseRoot, value.EndShift);
-    }
+    private static double Just(WellNode node, double inset) => node.Lower + inset * (node.Upper - node.Lower);
 
-    private int Search(WellNode node)
+    /// <summary>Finds the modes of a well and of those that joined in it; the count of them all, and ν at the lower end of its range.</summary>
+    private int Search(WellNode node, out double number)
     {
-        var first = 0;
-        if (node.Left is not null && node.Right is not null) first = Search(node.Left) + Search(node.Right);
-        var bottom = AtLower(node);
-        var order = first;
-        double guess = double.NaN;
-        var previous = double.NaN;
-        for (; order <= bottom.Number && found.Count <= mostModes; order++)
+        var order = 0;
+        if (node.Left is not null && node.Right is not null) order = Search(node.Left, out _) + Search(node.Right, out _);
+        var lower = Just(node, Inset);
+        var first = orders.Sample(node, lower, PhaseKind.Uniform).Number;
+        number = NumberAtLower(node, first);
+        var last = Math.Max(number, first);
+        var (guess, previous) = (double.NaN, double.NaN);
+        for (; order <= last && found.Count <= mostModes; order++)
         {
             cancellation.ThrowIfCancellationRequested();
-            var uniform = LevelSearch.Find(e => Sample(node, e, PhaseKind.Uniform), order, bottom.Level, node.Upper, guess);
-            found.Add(new(node, order, uniform.Level));
+            var uniform = LevelSearch.Find(e => orders.Sample(node, e, PhaseKind.Uniform), order, lower, node.Upper, guess);
+            if (orders.Choose(node, order, lower, uniform) is not { } mode) break;
+            found.Add(mode);
             guess = double.IsNaN(previous) ? uniform.Level + 1 / uniform.Slope : 2 * uniform.Level - previous;
             previous = uniform.Level;
         }
 
         return order;
-    }
-
-    private sealed record FoundMode(WellNode Node, int OrderInWell, double Level);
-
-    private WkbMode Report(FoundMode mode, int order) => new()
-    {
-        Order = order,
-        EffectiveIndex = new(Math.Sqrt(mode.Level), 1e-3),
-        FirstOrderIndex = Classic(mode),
-        OrderKept = 1,
-        OrderReason = "",
-        TurningPointsUm = [],
-        Well = 0,
-        WellCount = 1,
-        OrderInWell = mode.OrderInWell,
-    };
-
-    private double? Classic(FoundMode mode)
-    {
-        var bottom = Sample(mode.Node, mode.Node.Lower + Inset * (mode.Node.Upper - mode.Node.Lower), PhaseKind.Classic);
-        if (bottom.Number < mode.OrderInWell) return null;
-        var s = LevelSearch.Find(e => Sample(mode.Node, e, PhaseKind.Classic), mode.OrderInWell, bottom.Level, mode.Node.Upper, mode.Level);
-        return Math.Abs(s.Number - mode.OrderInWell) < 1e-9 ? Math.Sqrt(s.Level) : null;
     }
 }

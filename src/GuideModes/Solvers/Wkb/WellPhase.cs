@@ -1,4 +1,5 @@
 using GuideModes.Numerics;
+using MathNet.Numerics;
 
 namespace GuideModes.Solvers.Wkb;
 
@@ -24,6 +25,9 @@ internal readonly record struct PhaseValue(double Phase, double InverseRoot, dou
     public double Number => Phase / Math.PI;
 }
 
+/// <summary>ν by Dunham's rule to second order, ∫dx/√q, and the fourth-order term of the phase.</summary>
+internal readonly record struct SmoothValue(double Number, double InverseRoot, double Fourth);
+
 /// <summary>The continuous mode number of a well, ν(n_eff²), to first or second order.</summary>
 /// <remarks>
 /// Equation: u″ + Qu = 0 with Q = k₀²(n² − n_eff²) for u = E (TE), and with U = ¾(s′/s)² − ½s″/s, s = n², taken from
@@ -37,7 +41,7 @@ internal readonly record struct PhaseValue(double Phase, double InverseRoot, dou
 /// </remarks>
 internal sealed class WellPhase(ProfileMap map, WellFinder finder, PhaseIntegral integral)
 {
-    private const double NearZeta = 2, FarZeta = 4, FarAction = 20;
+    private const double NearZeta = 2, FarZeta = 4, FarAction = 20, NearestZeta = 0.02;
     private readonly double k = map.Wavenumber;
 
     /// <summary>The phase of a well that the finder holds for this level.</summary>
@@ -61,6 +65,75 @@ internal sealed class WellPhase(ProfileMap map, WellFinder finder, PhaseIntegral
 
         var last = finder.Arcs[well.First + well.Count - 1];
         return new(phase - End(last, level, 1, previousAction, kind, ref shift), inverse, shift);
+    }
+
+    /// <summary>First-order phases for a field: S at the start of each arc and what each adds; the phase in excess of the ends' own is returned.</summary>
+    public double ArcPhases(double level, int wellIndex, Span<double> start, Span<double> length)
+    {
+        var well = finder.Wells[wellIndex];
+        var none = 0.0;
+        for (var i = 0; i < well.Count; i++)
+        {
+            var arc = finder.Arcs[well.First + i];
+            length[i] = k * integral.Over(arc.Piece, level, arc.Left, arc.Right, arc.LeftTurning, arc.RightTurning, arc.Split).Root;
+            start[i] = i == 0
+                ? -End(arc, level, -1, length[0], PhaseKind.Classic, ref none)
+                : Cross(finder.Arcs[well.First + i - 1], arc, level, start[i - 1] + length[i - 1], 0, 0, PhaseKind.Classic, ref none);
+        }
+
+        var last = finder.Arcs[well.First + well.Count - 1];
+        return start[well.Count - 1] + length[well.Count - 1] - End(last, level, 1, 0, PhaseKind.Classic, ref none);
+    }
+
+    /// <summary>
+    /// How far n_eff² has to be lowered before no turning point is within a small part of an Airy length of a joint: nearer than that the
+    /// second-order integrals nearly cancel, and what they leave hardly changes.
+    /// </summary>
+    public double SecondOrderClearance(double level, int wellIndex)
+    {
+        var well = finder.Wells[wellIndex];
+        var clearance = 0.0;
+        for (var i = 0; i < well.Count; i++)
+        {
+            var arc = finder.Arcs[well.First + i];
+            if (!arc.LeftTurning) clearance = Math.Max(clearance, Clearance(JetAt(arc, -1), level));
+            if (!arc.RightTurning) clearance = Math.Max(clearance, Clearance(JetAt(arc, 1), level));
+        }
+
+        return clearance;
+    }
+
+    private double Clearance(in Jet s, double level) =>
+        s.D1 == 0 ? 0 : Math.Max(0, NearestZeta * Math.Pow(Math.Abs(k * k * s.D1), 2.0 / 3) / (k * k) - (s.Value - level));
+
+    /// <summary>ν of a well between two turning points of one piece, by Dunham's rule to second order, joints ignored, and the fourth-order phase.</summary>
+    public bool TrySmooth(int wellIndex, double level, bool fourth, out SmoothValue value)
+    {
+        value = default;
+        if (wellIndex < 0 || finder.Wells[wellIndex].Count != 1) return false;
+        var arc = finder.Arcs[finder.Wells[wellIndex].First];
+        if (!arc.LeftTurning || !arc.RightTurning) return false;
+        var action = integral.Over(arc.Piece, level, arc.Left, arc.Right, true, true, arc.Split);
+        var c = integral.CorrectionOver(arc, level, fourth);
+        var total = k * action.Root - c.Curvature / (48 * k) - c.Medium / (2 * k);
+        value = new(total / Math.PI - 0.5, action.InverseRoot, -c.Fourth / (1536 * k * k * k));
+        return true;
+    }
+
+    /// <summary>∫|κ| between two coordinates where n² &lt; n_eff² all along.</summary>
+    public double BarrierAction(double level, double left, double right)
+    {
+        var total = 0.0;
+        for (var i = 0; i < map.Starts.Length; i++)
+        {
+            var extent = map.Profile.Pieces[i].Extent;
+            var (from, to) = (Math.Max(left, extent.Start), Math.Min(right, extent.End));
+            if (!(to > from)) continue;
+            var (leftTurning, rightTurning) = (from > extent.Start, to < extent.End);
+            total += k * integral.Over(i, level, from, to, leftTurning, rightTurning, 0.5 * (from + to), -1).Root;
+        }
+
+        return total;
     }
 
     /// <summary>∫s₂ over an arc, the ends that are not turning points included.</summary>
@@ -101,9 +174,11 @@ internal sealed class WellPhase(ProfileMap map, WellFinder finder, PhaseIntegral
         var near = SideAt(arc, level, side, action, kind);
         var drive = Ratio(joint, -side) * DecayRate(joint, side, level, kind, 0);
         var phase = Math.Atan((drive - near.AmplitudeSlope + near.MediumSlope) / near.Rate) - near.Offset;
-        if (near.Blend > 0) shift += Math.Abs(phase - ClassicEnd(arc, level, side, joint));
+        if (kind == PhaseKind.Uniform) shift += ShiftFrom(ClassicEnd(arc, level, side, joint), phase);
         return phase;
     }
+
+    private static double ShiftFrom(double classic, double phase) => Math.Abs(phase - classic) is var d && d > 1e-13 ? d : 0;
 
     private double ClassicEnd(in Arc arc, double level, int side, int joint)
     {
@@ -157,7 +232,7 @@ internal sealed class WellPhase(ProfileMap map, WellFinder finder, PhaseIntegral
         var second = kind == PhaseKind.SecondOrder;
         var medium = second && map.IsTransverseMagnetic ? side * s.D1 / (2 * s.Value) : 0;
         var plain = new Side(kappa, second ? slope / (4 * q) : 0, medium, 0, 0);
-        var langer = Nearest(arc, q, slope, k * k * s.D2, side, action);
+        var langer = Nearest(arc, q, slope, k * k * s.D2, side, action, Opposite(arc, level, side));
         return langer.Weight > 0 ? Mix(plain, langer, second) : plain;
     }
 
@@ -182,13 +257,22 @@ internal sealed class WellPhase(ProfileMap map, WellFinder finder, PhaseIntegral
             at.Weight);
     }
 
-    private static Langer Nearest(in Arc arc, double q, double slope, double curvature, int side, double action)
+    /// <summary>The virtual turning point beyond the other end of an arc.</summary>
+    private Langer Opposite(in Arc arc, double level, int side)
+    {
+        var s = JetAt(arc, -side);
+        var q = k * k * (s.Value - level);
+        return q > 0 && side * s.D1 > 0 ? Virtual(q, side * k * k * s.D1, k * k * s.D2) : default;
+    }
+
+    private static Langer Nearest(in Arc arc, double q, double slope, double curvature, int side, double action, in Langer opposite)
     {
         var beyond = slope < 0 ? Virtual(q, -slope, curvature) : default;
         var inside = side > 0 ? arc.LeftTurning : arc.RightTurning;
-        if (!inside) return beyond;
-        var zeta = Math.Pow(1.5 * action, 2.0 / 3);
-        var weight = Far(zeta);
+        if (!inside && (opposite.Weight == 0 || slope <= 0)) return beyond;
+        var phase = inside ? action : action + 2.0 / 3 * opposite.Zeta * Math.Sqrt(opposite.Zeta);
+        var zeta = Math.Pow(1.5 * phase, 2.0 / 3);
+        var weight = Far(zeta) * (inside ? 1 : opposite.Weight);
         if (weight <= beyond.Weight) return beyond;
         var rate = Math.Sqrt(q / Math.Max(zeta, 1e-150));
         var bend = zeta > 0.02 ? (slope - rate * rate * rate) / (2 * rate * zeta) : curvature / (5 * rate * rate);
@@ -224,22 +308,31 @@ internal sealed class WellPhase(ProfileMap map, WellFinder finder, PhaseIntegral
         var turning = side > 0 ? arc.Right : arc.Left;
         if (!BarrierInPiece(arc.Piece, turning, level, side, out var action)) return 0;
         var s = JetAt(arc, side);
-        var q = k * k * Math.Max(level - s.Value, 1e-30);
         var z = Math.Max(Math.Pow(1.5 * action, 2.0 / 3), 1e-9);
-        var slope = -side * k * k * s.D1;
-        var rate = Math.Sqrt(q / z);
-        if (z < 1e-6) rate = Math.Cbrt(Math.Max(slope, 1e-30));
-        var bend = z > 0.02 ? (slope - rate * rate * rate) / (2 * rate * z) : -k * k * s.D2 / (5 * rate * rate);
         var joint = side > 0 ? arc.Piece + 1 : arc.Piece;
         var medium = map.IsTransverseMagnetic && kind == PhaseKind.SecondOrder ? side * s.D1 / (2 * s.Value) : 0;
         var log = -Ratio(joint, -side) * DecayRate(joint, side, level, kind, 0) - medium;
-        return Math.Atan2(Numerator(z, (log + 0.5 * bend / rate) / rate, out var denominator), denominator);
+        var (fall, rise) = EdgeRates(s, level, side, z, kind);
+        return Math.Atan2((log + fall) * SpecialFunctions.AiryAi(z), (rise - log) * SpecialFunctions.AiryBi(z));
     }
 
-    private static double Numerator(double z, double log, out double denominator)
+    /// <summary>
+    /// The outward rates of the falling and the rising solution where a barrier behind a turning point ends: Langer's, unless
+    /// the local slope says that n² has long levelled off there.
+    /// </summary>
+    private (double Fall, double Rise) EdgeRates(in Jet s, double level, int side, double z, PhaseKind kind)
     {
-        denominator = MathNet.Numerics.SpecialFunctions.AiryBiPrime(z) - log * MathNet.Numerics.SpecialFunctions.AiryBi(z);
-        return -(MathNet.Numerics.SpecialFunctions.AiryAiPrime(z) - log * MathNet.Numerics.SpecialFunctions.AiryAi(z));
+        var local = Rates(s, level, side, kind);
+        var q = k * k * Math.Max(level - s.Value, 1e-30);
+        var slope = -side * k * k * s.D1;
+        var spread = slope > 0 ? Math.Abs(Math.Log(q / Math.Pow(slope, 2.0 / 3) / z)) : 10;
+        var weight = z < 1e-6 ? 1 : 1 - Smooth((spread - 0.5) / 0.7);
+        if (weight == 0) return local;
+        var rate = z < 1e-6 ? Math.Cbrt(Math.Max(slope, 1e-30)) : Math.Sqrt(q / z);
+        var bend = z > 0.02 ? (slope - rate * rate * rate) / (2 * rate * z) : -k * k * s.D2 / (5 * rate * rate);
+        var (fall, rise) = AiryRates(z, rate);
+        var half = 0.5 * bend / rate;
+        return (weight * (fall + half) + (1 - weight) * local.Fall, weight * (rise - half) + (1 - weight) * local.Rise);
     }
 
     /// <summary>The action from a turning point outward to the end of its piece; false where it is large or another well comes first.</summary>
@@ -315,8 +408,21 @@ internal sealed class WellPhase(ProfileMap map, WellFinder finder, PhaseIntegral
         var (fallFar, riseFar) = Rates(far, level, side, kind);
         var mediumFar = map.IsTransverseMagnetic && kind == PhaseKind.SecondOrder ? side * far.D1 / (2 * far.Value) : 0;
         var log = -Ratio(next, -side) * DecayRate(next, side, level, kind, depth + 1) - mediumFar;
-        var growth = (log + fallFar) / (riseFar - log) * Math.Exp(-2 * action);
+        var growth = (log + fallFar) / (riseFar - log) * Through(near, level, side, action);
         return (fall - growth * rise) / (1 + growth) - medium;
+    }
+
+    /// <summary>What a wave that rises toward the near edge of a barrier has left there, against the falling one: e^(−2η), or its Airy form near a turning point.</summary>
+    private double Through(in Jet near, double level, int side, double action)
+    {
+        var slope = -side * k * k * near.D1;
+        var plain = Math.Exp(-2 * action);
+        var z = slope > 0 ? k * k * Math.Max(level - near.Value, 1e-30) / Math.Pow(slope, 2.0 / 3) : FarZeta;
+        var weight = Far(z);
+        if (weight == 0) return plain;
+        var far = Math.Pow(z * Math.Sqrt(z) + 1.5 * action, 2.0 / 3);
+        var airy = SpecialFunctions.AiryAi(far) * SpecialFunctions.AiryBi(z) / (SpecialFunctions.AiryBi(far) * SpecialFunctions.AiryAi(z));
+        return weight * airy + (1 - weight) * plain;
     }
 
     /// <summary>The outward rates of the falling and the rising solution at the edge of a graded barrier.</summary>
@@ -335,6 +441,6 @@ internal sealed class WellPhase(ProfileMap map, WellFinder finder, PhaseIntegral
     }
 
     private static (double Fall, double Rise) AiryRates(double z, double scale) => (
-        -scale * MathNet.Numerics.SpecialFunctions.AiryAiPrime(z) / MathNet.Numerics.SpecialFunctions.AiryAi(z),
-        scale * MathNet.Numerics.SpecialFunctions.AiryBiPrime(z) / MathNet.Numerics.SpecialFunctions.AiryBi(z));
+        -scale * SpecialFunctions.AiryAiPrime(z) / SpecialFunctions.AiryAi(z),
+        scale * SpecialFunctions.AiryBiPrime(z) / SpecialFunctions.AiryBi(z));
 }

@@ -1,4 +1,5 @@
 using System.Collections.Immutable;
+using System.Diagnostics.CodeAnalysis;
 
 namespace GuideModes.Solvers.Wkb;
 
@@ -19,5 +20,12 @@ public sealed record WkbSolver
     }
 
     /// <summary>The asymptotic field of a mode: WKB away from turning points, uniform Airy through them, normalised.</summary>
-    public SampledField Field(ModeProblem problem, WkbMode mode, ImmutableArray<double> xUm) => throw new NotImplementedException();
+    /// <remarks>A mode of one well among several has its field there alone: near-degenerate wells share theirs in truth.</remarks>
+    [SuppressMessage("Performance", "CA1822:Mark members as static", Justification = "Beside Solve: a caller holds one solver.")]
+    public SampledField Field(ModeProblem problem, WkbMode mode, ImmutableArray<double> xUm)
+    {
+        ArgumentNullException.ThrowIfNull(problem);
+        ArgumentNullException.ThrowIfNull(mode);
+        return new WkbField(problem, mode).Sample(xUm);
+    }
 }

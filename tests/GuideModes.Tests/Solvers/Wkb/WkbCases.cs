@@ -8,11 +8,30 @@ using MathNet.Numerics;
 namespace GuideModes.Tests.Solvers.Wkb;
 
 /// <summary>A piece given by a formula in jets, for tests that stand below the guide document.</summary>
-internal sealed class JetPiece(Interval extent, Func<Jet, Jet> indexSquared, Func<double, double>? fast = null) : SmoothPiece(extent, 0)
+internal class JetPiece(Interval extent, Func<Jet, Jet> indexSquared, Func<double, double>? fast = null) : SmoothPiece(extent, 0)
 {
     public override double IndexSquared(double x) => fast is null ? Jet(x).Value : fast(x);
 
     public override Jet Jet(double x) => indexSquared(GuideModes.Numerics.Jet.Coordinate(x));
+}
+
+/// <summary>Counts what is asked of a piece.</summary>
+internal sealed class CountingPiece(SmoothPiece inner) : SmoothPiece(inner.Extent, inner.Region)
+{
+    public int Values;
+    public int Jets;
+
+    public override double IndexSquared(double x)
+    {
+        Values++;
+        return inner.IndexSquared(x);
+    }
+
+    public override Jet Jet(double x)
+    {
+        Jets++;
+        return inner.Jet(x);
+    }
 }
 
 /// <summary>The planar guides of modes.json, built from their parameters, and the functions they need in jets.</summary>
@@ -21,7 +40,7 @@ internal static class WkbCases
     private static readonly JsonElement Root = JsonDocument.Parse(
         File.ReadAllText(Path.Combine(AppContext.BaseDirectory, "ReferenceData", "modes.json"))).RootElement;
 
-    public static Jet Exp(Jet a) => a.Compose(Math.Exp(a.Value), Math.Exp(a.Value), Math.Exp(a.Value), Math.Exp(a.Value));
+    public static Jet Exp(Jet a) => Math.Exp(a.Value) is var e ? a.Compose(e, e, e, e) : default;
 
     public static Jet Sqr(Jet a) => a * a;
 
@@ -89,27 +108,28 @@ internal static class WkbCases
         }
     }
 
-    private static (Func<Jet, Jet> IndexSquared, double End) Graded(string law, JsonElement r) => law switch
+    private static (Func<Jet, Jet> IndexSquared, double End) Graded(string law, JsonElement r)
     {
-        "parabolic" when r.TryGetProperty("halfWidthUm", out var half) =>
-            (x => Power(r, half.GetDouble(), Sqr)(x), 0),
-        "parabolic" => (x => Get(r, "nCenter") * Get(r, "nCenter") * (1 - Sqr((x - Get(r, "centerUm")) / Get(r, "lengthUm"))), 0),
-        "power" => (x => Power(r, Get(r, "halfWidthUm"), s => Sqr(Sqr(s)))(x), 0),
-        "sech2" => (x => Base(r) + (Sq(r, "nPeak") - Base(r)) * SechSquared((x - Get(r, "centerUm")) / Get(r, "widthUm")), 100),
-        "exponential" => (x => Base(r) + (Sq(r, "nSurface") - Base(r)) * Exp(-(x / Get(r, "depthUm"))), 37 * Get(r, "depthUm")),
-        "gaussian" => (x => Sqr(Get(r, "nBase") + Get(r, "deltaN") * Exp(-Sqr(x / Get(r, "depthUm")))), 6.2 * Get(r, "depthUm")),
-        "erfc" => (x => Sqr(Get(r, "nBase") + Get(r, "deltaN") * (1 - Erf(x / Get(r, "depthUm")))), 5.9 * Get(r, "depthUm")),
-        "linear" => (x => Sq(r, "nStart") + (Sq(r, "nEnd") - Sq(r, "nStart")) * x / Get(r, "thicknessUm"), 0),
-        "formula" when r.GetProperty("formula").GetString()!.Contains("erf") =>
-            (x => Sqr(1.507 + 0.005 * (Erf((9.0 - x) / 2.5) + Erf((x - 3.0) / 1.8))), 24),
-        "formula" => (x => Sqr(1.5125 + 0.04 / (1 + Exp((x - 3.0) / 0.5))), 21),
-        _ => throw new NotSupportedException(law),
-    };
-
-    private static Func<Jet, Jet> Power(JsonElement r, double half, Func<Jet, Jet> shape) =>
-        x => Sq(r, "nCenter") - (Sq(r, "nCenter") - Sq(r, "nEdge")) * shape((x - Get(r, "centerUm")) / half);
-
-    private static double Sq(JsonElement r, string name) => Get(r, name) * Get(r, name);
-
-    private static double Base(JsonElement r) => Sq(r, "nBase");
+        double Of(string name) => r.TryGetProperty(name, out var v) && v.ValueKind == JsonValueKind.Number ? v.GetDouble() : 0;
+        double Square(string name) => Of(name) * Of(name);
+        var (n, b, d, c) = (Of("nBase"), Square("nBase"), Of("depthUm"), Of("centerUm"));
+        var (middle, edge, half, rise) = (Square("nCenter"), Square("nEdge"), Of("halfWidthUm"), Of("deltaN"));
+        var (peak, width, surface, length) = (Square("nPeak"), Of("widthUm"), Square("nSurface"), Of("lengthUm"));
+        var (start, slope) = (Square("nStart"), (Square("nEnd") - Square("nStart")) / Of("thicknessUm"));
+        return law switch
+        {
+            "parabolic" when half > 0 => (x => middle - (middle - edge) * Sqr((x - c) / half), 0),
+            "parabolic" => (x => middle * (1 - Sqr((x - c) / length)), 0),
+            "power" => (x => middle - (middle - edge) * Sqr(Sqr((x - c) / half)), 0),
+            "sech2" => (x => b + (peak - b) * SechSquared((x - c) / width), 100),
+            "exponential" => (x => b + (surface - b) * Exp(-(x / d)), 37 * d),
+            "gaussian" => (x => Sqr(n + rise * Exp(-Sqr(x / d))), 6.2 * d),
+            "erfc" => (x => Sqr(n + rise * (1 - Erf(x / d))), 5.9 * d),
+            "linear" => (x => start + slope * x, 0),
+            "formula" when r.GetProperty("formula").GetString()!.Contains("erf") =>
+                (x => Sqr(1.507 + 0.005 * (Erf((9.0 - x) / 2.5) + Erf((x - 3.0) / 1.8))), 24),
+            "formula" => (x => Sqr(1.5125 + 0.04 / (1 + Exp((x - 3.0) / 0.5))), 21),
+            _ => throw new NotSupportedException(law),
+        };
+    }
 }
