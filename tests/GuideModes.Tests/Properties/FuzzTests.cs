@@ -44,7 +44,7 @@ public sealed class FuzzTests
 
         Assert.InRange(guided, 50, 300);
         Assert.InRange(refused, 0, 150);
-        Assert.True(slowest < TimeSpan.FromSeconds(1), $"slowest {slowest}: {slow}");
+        Assert.True(slowest < TimeSpan.FromSeconds(10), $"slowest {slowest}: {slow}");
     }
 
     private static RandomGuide Stretched(RandomGuide guide, double stretch, double wavelength, double cover, double substrate)
