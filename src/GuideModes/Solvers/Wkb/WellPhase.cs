@@ -45,26 +45,61 @@ internal sealed class WellPhase(ProfileMap map, WellFinder finder, PhaseIntegral
     private readonly double k = map.Wavenumber;
 
     /// <summary>The phase of a well that the finder holds for this level.</summary>
+    /// <remarks>
+    /// S is carried from the left to each arc in turn, and what the right end asks for is carried back to it. The two differ by the same
+    /// multiple of π at a mode wherever they are compared; between modes a joint bends the scale. Where a joint is near the right turning
+    /// point they are compared on its left, so that ν stays continuous while the turning point crosses it.
+    /// </remarks>
     public PhaseValue Evaluate(double level, int wellIndex, PhaseKind kind)
     {
         var well = finder.Wells[wellIndex];
-        double phase = 0, inverse = 0, shift = 0;
+        Span<double> starts = well.Count <= 128 ? stackalloc double[well.Count] : new double[well.Count];
+        Span<double> lengths = well.Count <= 128 ? stackalloc double[well.Count] : new double[well.Count];
+        Span<Joint> joints = well.Count <= 128 ? stackalloc Joint[well.Count] : new Joint[well.Count];
+        double inverse = 0, shift = 0, action = 0, before = 0;
         for (var i = 0; i < well.Count; i++)
         {
             var arc = finder.Arcs[well.First + i];
-            var action = integral.Over(arc.Piece, level, arc.Left, arc.Right, arc.LeftTurning, arc.RightTurning, arc.Split);
-            var full = k * action.Root;
-            inverse += action.InverseRoot;
-            phase = i == 0
-                ? -End(arc, level, -1, full, kind, ref shift)
-                : Cross(finder.Arcs[well.First + i - 1], arc, level, phase, previousAction, full, kind, ref shift);
-            phase += full;
-            if (kind == PhaseKind.SecondOrder) phase += SecondOrder(arc, level);
-            previousAction = full;
+            var over = integral.Over(arc.Piece, level, arc.Left, arc.Right, arc.LeftTurning, arc.RightTurning, arc.Split);
+            (before, action) = (action, k * over.Root);
+            inverse += over.InverseRoot;
+            lengths[i] = action + (kind == PhaseKind.SecondOrder ? SecondOrder(arc, level) : 0);
+            if (i == 0)
+            {
+                starts[0] = -End(arc, level, -1, action, kind, ref shift);
+                continue;
+            }
+
+            joints[i] = JointAt(finder.Arcs[well.First + i - 1], arc, level, before, action, kind);
+            var phase = starts[i - 1] + lengths[i - 1];
+            starts[i] = joints[i].Across(phase);
+            if (joints[i].Blend > 0) shift += Math.Abs(starts[i] - phase);
         }
 
-        var last = finder.Arcs[well.First + well.Count - 1];
-        return new(phase - End(last, level, 1, previousAction, kind, ref shift), inverse, shift);
+        var wanted = End(finder.Arcs[well.First + well.Count - 1], level, 1, action, kind, ref shift) - lengths[^1];
+        var excess = starts[^1] - wanted;
+        for (var i = well.Count - 1; i > 0; i--)
+        {
+            wanted = joints[i].Back(wanted) - lengths[i - 1];
+            if (joints[i].NearRight > 0) excess += joints[i].NearRight * (starts[i - 1] - wanted - excess);
+        }
+
+        return new(excess, inverse, shift);
+    }
+
+    /// <summary>How S passes an interior joint: tan S₂ = α tan S₁ + δ at the joint itself, and the offsets of the cosine forms there.</summary>
+    private readonly record struct Joint(double Alpha, double Delta, double LeftOffset, double RightOffset, double NearRight, double Blend)
+    {
+        public double Across(double phase) => Bend(phase + LeftOffset, Alpha, Delta) + RightOffset;
+
+        public double Back(double phase) => Bend(phase - RightOffset, 1 / Alpha, -Delta / Alpha) - LeftOffset;
+
+        private static double Bend(double phase, double alpha, double delta)
+        {
+            var turns = Math.Round(phase / Math.PI) * Math.PI;
+            var (sin, cos) = Math.SinCos(phase - turns);
+            return turns + Math.Atan2(alpha * sin + delta * cos, cos);
+        }
     }
 
     /// <summary>First-order phases for a field: S at the start of each arc and what each adds; the phase in excess of the ends' own is returned.</summary>
@@ -78,7 +113,7 @@ internal sealed class WellPhase(ProfileMap map, WellFinder finder, PhaseIntegral
             length[i] = k * integral.Over(arc.Piece, level, arc.Left, arc.Right, arc.LeftTurning, arc.RightTurning, arc.Split).Root;
             start[i] = i == 0
                 ? -End(arc, level, -1, length[0], PhaseKind.Classic, ref none)
-                : Cross(finder.Arcs[well.First + i - 1], arc, level, start[i - 1] + length[i - 1], 0, 0, PhaseKind.Classic, ref none);
+                : JointAt(finder.Arcs[well.First + i - 1], arc, level, 0, 0, PhaseKind.Classic).Across(start[i - 1] + length[i - 1]);
         }
 
         var last = finder.Arcs[well.First + well.Count - 1];
@@ -153,8 +188,6 @@ internal sealed class WellPhase(ProfileMap map, WellFinder finder, PhaseIntegral
         return s.D1 / (q * Math.Sqrt(q) * k);
     }
 
-    private double previousAction;
-
     private Jet JetAt(in Arc arc, int side) => side > 0 ? map.Ends[arc.Piece] : map.Starts[arc.Piece];
 
     /// <summary>The end phase φ on one side (−1 left, +1 right).</summary>
@@ -196,22 +229,21 @@ internal sealed class WellPhase(ProfileMap map, WellFinder finder, PhaseIntegral
         return near < 0 ? map.LeftOf(joint) / map.RightOf(joint) : map.RightOf(joint) / map.LeftOf(joint);
     }
 
-    /// <summary>The phase S on the far side of an interior joint.</summary>
-    private double Cross(in Arc from, in Arc to, double level, double phase, double actionFrom, double actionTo, PhaseKind kind, ref double shift)
+    private Joint JointAt(in Arc from, in Arc to, double level, double actionFrom, double actionTo, PhaseKind kind)
     {
         var joint = to.Piece;
-        if (kind == PhaseKind.Classic && !map.IsStep(joint)) return phase;
+        if (kind == PhaseKind.Classic && !map.IsStep(joint)) return new(1, 0, 0, 0, 0, 0);
         var left = SideAt(from, level, 1, actionFrom, kind);
         var right = SideAt(to, level, -1, actionTo, kind);
         var ratio = Ratio(joint, 1);
-        var before = phase + left.Offset;
-        var turns = Math.Round(before / Math.PI) * Math.PI;
-        var (sin, cos) = Math.SinCos(before - turns);
-        var drive = ratio * (left.Rate * sin + (left.AmplitudeSlope - left.MediumSlope) * cos)
-            + (right.AmplitudeSlope - right.MediumSlope) * cos;
-        var after = turns + Math.Atan2(drive, right.Rate * cos) + right.Offset;
-        if (left.Blend > 0 || right.Blend > 0) shift += Math.Abs(after - phase);
-        return after;
+        var delta = ratio * (left.AmplitudeSlope - left.MediumSlope) + right.AmplitudeSlope - right.MediumSlope;
+        return new(
+            ratio * left.Rate / right.Rate,
+            delta / right.Rate,
+            left.Offset,
+            right.Offset,
+            right.Inward ? right.Blend : 0,
+            Math.Max(left.Blend, right.Blend));
     }
 
     /// <summary>What the field does at the inner side of a joint.</summary>
@@ -220,7 +252,8 @@ internal sealed class WellPhase(ProfileMap map, WellFinder finder, PhaseIntegral
     /// <param name="MediumSlope">s′/(2s), outward (TM)</param>
     /// <param name="Offset">The phase at the joint less what the cosine form says of it, outward.</param>
     /// <param name="Blend">The weight of the Airy form.</param>
-    private readonly record struct Side(double Rate, double AmplitudeSlope, double MediumSlope, double Offset, double Blend);
+    /// <param name="Inward">True where the turning point of that form lies inside the well.</param>
+    private readonly record struct Side(double Rate, double AmplitudeSlope, double MediumSlope, double Offset, double Blend, bool Inward = false);
 
     private Side SideAt(in Arc arc, double level, int side, double action, PhaseKind kind)
     {
@@ -254,7 +287,8 @@ internal sealed class WellPhase(ProfileMap map, WellFinder finder, PhaseIntegral
             plain.AmplitudeSlope + at.Weight * (sign * amplitude - plain.AmplitudeSlope),
             plain.MediumSlope,
             at.Weight * sign * offset,
-            at.Weight);
+            at.Weight,
+            !at.Outward);
     }
 
     /// <summary>The virtual turning point beyond the other end of an arc.</summary>
