@@ -1,5 +1,4 @@
 using GuideModes.Numerics;
-using MathNet.Numerics;
 
 namespace GuideModes.Solvers.Wkb;
 
@@ -347,7 +346,8 @@ internal sealed class WellPhase(ProfileMap map, WellFinder finder, PhaseIntegral
         var medium = map.IsTransverseMagnetic && kind == PhaseKind.SecondOrder ? side * s.D1 / (2 * s.Value) : 0;
         var log = -Ratio(joint, -side) * DecayRate(joint, side, level, kind, 0) - medium;
         var (fall, rise) = EdgeRates(s, level, side, z, kind);
-        return Math.Atan2((log + fall) * SpecialFunctions.AiryAi(z), (rise - log) * SpecialFunctions.AiryBi(z));
+        var airy = AiryTable.At(z);
+        return Math.Atan2((log + fall) * airy.Ai, (rise - log) * airy.Bi);
     }
 
     /// <summary>
@@ -385,9 +385,9 @@ internal sealed class WellPhase(ProfileMap map, WellFinder finder, PhaseIntegral
         var (low, high) = (Math.Min(a, b), Math.Max(a, b));
         double least = 0;
         dark = true;
-        foreach (ref readonly var segment in map.Segments.AsSpan())
+        foreach (ref readonly var segment in map.SegmentsOf(piece))
         {
-            if (segment.Piece != piece || segment.Right <= low || segment.Left >= high) continue;
+            if (segment.Right <= low || segment.Left >= high) continue;
             var whole = segment.Left >= low && segment.Right <= high;
             if (whole && segment.Most > level) dark = false;
             var (from, to) = (Math.Max(low, segment.Left), Math.Min(high, segment.Right));
@@ -455,8 +455,8 @@ internal sealed class WellPhase(ProfileMap map, WellFinder finder, PhaseIntegral
         var weight = Far(z);
         if (weight == 0) return plain;
         var far = Math.Pow(z * Math.Sqrt(z) + 1.5 * action, 2.0 / 3);
-        var airy = SpecialFunctions.AiryAi(far) * SpecialFunctions.AiryBi(z) / (SpecialFunctions.AiryBi(far) * SpecialFunctions.AiryAi(z));
-        return weight * airy + (1 - weight) * plain;
+        var (there, here) = (AiryTable.At(far), AiryTable.At(z));
+        return weight * there.Ai * here.Bi / (there.Bi * here.Ai) + (1 - weight) * plain;
     }
 
     /// <summary>The outward rates of the falling and the rising solution at the edge of a graded barrier.</summary>
@@ -474,7 +474,9 @@ internal sealed class WellPhase(ProfileMap map, WellFinder finder, PhaseIntegral
         return (weight * fall + (1 - weight) * (gamma + bend), weight * rise + (1 - weight) * (gamma - bend));
     }
 
-    private static (double Fall, double Rise) AiryRates(double z, double scale) => (
-        -scale * SpecialFunctions.AiryAiPrime(z) / SpecialFunctions.AiryAi(z),
-        scale * SpecialFunctions.AiryBiPrime(z) / SpecialFunctions.AiryBi(z));
+    private static (double Fall, double Rise) AiryRates(double z, double scale)
+    {
+        var airy = AiryTable.At(z);
+        return (-scale * airy.AiSlope / airy.Ai, scale * airy.BiSlope / airy.Bi);
+    }
 }
