@@ -45,7 +45,8 @@ internal static class ViewRange
         var extent = profile.Extent;
         if (!profile.LastRegionIsUnbounded) return (extent.Start, extent.End);
 
-        var first = profile.Pieces.First(piece => piece.Region == profile.RegionCount - 1).Extent.Start;
+        // A tail that starts where it has already vanished leaves no piece.
+        var first = profile.Pieces.FirstOrDefault(piece => piece.Region == profile.RegionCount - 1)?.Extent.Start ?? extent.End;
         var samples = ProfileSamples.Of(profile);
         var rise = samples.Index.Max(n => Math.Abs(n - profile.Substrate.Index));
         var last = samples.Index.FindLastIndex(n => Math.Abs(n - profile.Substrate.Index) > 0.005 * rise);

@@ -31,7 +31,7 @@ public sealed class GuideAnswer
     /// <summary>The guided modes by decreasing n_eff.</summary>
     public ImmutableArray<CertifiedMode> Modes { get; }
 
-    /// <summary>The WKB engine's continuous mode count at cutoff: 8.31 is eight modes and a third of a ninth.</summary>
+    /// <summary>The WKB engine's continuous mode count at cutoff: 8.31 is eight modes and a third of a ninth; not a number where WKB does not apply.</summary>
     public double WkbModeNumber { get; }
 
     /// <summary>Remarks on the guide as a whole: sentences.</summary>
@@ -71,6 +71,7 @@ public sealed class GuideAnswer
         if (Outcome == SearchOutcome.Unresolved)
             return ["The profile has features too fine to resolve in the allowed number of steps; no mode is given rather than a doubtful one."];
         if (Modes.IsEmpty) return [WhyNothingIsGuided()];
+        if (double.IsNaN(WkbModeNumber)) return ["The profile ripples too often for WKB; no mode has a second witness."];
         var whole = Math.Floor(WkbModeNumber);
         return whole == Modes.Length
             ? []

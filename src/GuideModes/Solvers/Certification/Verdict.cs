@@ -64,12 +64,14 @@ internal sealed class Verdict(IndexProfile profile, Polarization polarization, T
         return gap;
     }
 
-    private static (Trust Trust, string Reason) Weigh(GuidedMode mode, WkbMode? asymptotic, ImmutableArray<string> remarks)
+    private (Trust Trust, string Reason) Weigh(GuidedMode mode, WkbMode? asymptotic, ImmutableArray<string> remarks)
     {
         if (remarks.Contains(Remark.WideBracket))
             return (Trust.Watch, Say($"The two resolutions differ by {2 * mode.EffectiveIndex.Error:0.0e-0}: the profile has a feature the solver resolves poorly."));
         if (asymptotic is null)
         {
+            if (wkb.Outcome == SearchOutcome.Unresolved)
+                return (Trust.Watch, "The profile ripples too often for WKB, which asks for slow changes; the transfer matrix alone speaks.");
             return remarks.Contains(Remark.NearCutoff)
                 ? (Trust.Watch, "The mode is so close to cutoff that WKB misses it; the zero count of the exact solver finds it.")
                 : (Trust.Disagree, "WKB finds no mode of this order, though it is not at cutoff.");

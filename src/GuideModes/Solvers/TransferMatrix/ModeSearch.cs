@@ -10,6 +10,8 @@ internal sealed class ModeSearch
 {
     private const int MaximumSweeps = 200;
 
+    private const double Rounding = 2.3e-16;
+
     /// <summary>
     /// In a single well Θ bends on the scale of a radian, so that Newton's next step is smaller than this one by about the angle
     /// still missing, and from here one step lands within rounding. Between coupled wells Θ may bend within a splitting.
@@ -23,6 +25,7 @@ internal sealed class ModeSearch
     private readonly double[] _low;
     private readonly double[] _high;
     private readonly int _peak;
+    private readonly double _noise;
     private readonly double[] _logs;
     private double _scale = 1;
 
@@ -35,6 +38,7 @@ internal sealed class ModeSearch
         Array.Fill(_low, lowest);
         _peak = Array.IndexOf(sweep.Mesh.Mean, sweep.Mesh.Mean.Min());
         _logs = new double[sweep.Mesh.Count + 1];
+        _noise = Rounding * Math.Sqrt(sweep.Mesh.Count) * Math.Abs(lowest);
     }
 
     /// <summary>The exact number of modes.</summary>
@@ -100,10 +104,12 @@ internal sealed class ModeSearch
             var residual = order * Math.PI - theta;
             step = residual / rate;
             var next = energy + step;
-            var resolution = 2.3e-16 * Math.Abs(energy) + 1e-300;
+            var resolution = Rounding * Math.Abs(energy) + 1e-300;
             if (Math.Abs(step) <= resolution || Math.Abs(residual) < lastAngle)
                 return (next, Math.Abs(step * residual) + resolution);
             var slow = Math.Abs(residual) > 0.5 * last;
+            // What no longer shrinks and is no more than what rounding does over many steps is rounding.
+            if (slow && Math.Abs(step) <= _noise) return (next, _noise);
             if (!(next > _low[order] && next < _high[order]) || slow) next = 0.5 * (_low[order] + _high[order]);
             if (_high[order] - _low[order] <= 2 * resolution) return (next, _high[order] - _low[order]);
             last = slow ? double.PositiveInfinity : Math.Abs(residual);

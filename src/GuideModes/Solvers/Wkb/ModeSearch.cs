@@ -14,6 +14,9 @@ internal sealed class ModeSearch
     /// <summary>The same for the second order, whose integrals rounding spoils earlier.</summary>
     private const double SecondOrderInset = 1e-9;
 
+    /// <summary>A profile with more maxima is not for asymptotics: its ripples are not slow against the field.</summary>
+    private const int MostPeaks = 100;
+
     private readonly ProfileMap map;
     private readonly WellFinder finder;
     private readonly WellPhase phase;
@@ -33,8 +36,10 @@ internal sealed class ModeSearch
 
     public WkbSolution Run()
     {
+        var wells = WellTree.Peaks(map) <= MostPeaks ? WellTree.Build(map) : null;
+        if (wells is null) return new([], double.NaN, SearchOutcome.Unresolved);
         var total = 0.0;
-        foreach (var root in WellTree.Build(map))
+        foreach (var root in wells)
         {
             Search(root, out var number);
             total += Math.Max(0, 1 + number);

@@ -15,6 +15,20 @@ internal static class WellTree
     /// <summary>A dip of n² smaller than this share of it parts no wells.</summary>
     private const double LeastDip = 1e-13;
 
+    /// <summary>How many maxima the profile has, counted as changes from a rising to a falling segment.</summary>
+    public static int Peaks(ProfileMap map)
+    {
+        var (count, rising) = (0, true);
+        foreach (var segment in map.Segments)
+        {
+            var rises = segment.RightSquared >= segment.LeftSquared;
+            if (rising && !rises) count++;
+            rising = rises;
+        }
+
+        return count;
+    }
+
     /// <summary>The wells at cutoff, from left to right, each with its children.</summary>
     public static List<WellNode> Build(ProfileMap map)
     {
