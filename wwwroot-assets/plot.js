@@ -36,7 +36,7 @@ function trace(curve, numbers, colour, kind) {
     case "profile":
       return { ...common, line: { color: colour.profile, width: 2 }, fill: "tozeroy", fillcolor: colour.fill, hovertemplate: "x = %{x:.4f} µm<br>n = %{y:.6f}<extra></extra>" };
     case "level":
-      return { ...common, line: { color: own ?? colour.level, width: own ? 1.6 : 1.2, dash: own ? "solid" : "dot" }, hovertemplate: "%{fullData.name}<extra></extra>" };
+      return { ...common, line: { color: own ?? colour.level, width: own ? 1.6 : 1.2, dash: own ? "solid" : "dot" }, text: curve.parts.flatMap((part) => Array(part.count).fill(part.name)), hovertemplate: "%{text}<extra></extra>" };
     default:
       return {
         ...common,
@@ -51,7 +51,7 @@ function axis(title, range, colour, font) {
   return {
     title: { text: title, font: { ...font, size: 13 }, standoff: 10 }, range: [...range], color: colour.ink, gridcolor: colour.grid,
     zerolinecolor: colour.grid, linecolor: colour.soft, tickcolor: colour.soft, ticks: "outside", ticklen: 4, showline: true, mirror: false,
-    automargin: true, exponentformat: "power", minexponent: 5,
+    exponentformat: "power", minexponent: 5,
   };
 }
 

@@ -34,6 +34,7 @@ internal static class Hosting
 
         builder.Logging.AddFilter("Microsoft.AspNetCore.DataProtection", LogLevel.Error);
         builder.Logging.AddFilter("Microsoft.AspNetCore.Hosting.Diagnostics", LogLevel.Warning);
+        builder.Logging.AddFilter("Microsoft.AspNetCore.Http", LogLevel.Warning);
         builder.Logging.AddFilter("Microsoft.AspNetCore.Routing", LogLevel.Warning);
         builder.Logging.AddFilter("Microsoft.AspNetCore.StaticAssets", LogLevel.Warning);
         builder.Logging.AddFilter("Microsoft.AspNetCore.Antiforgery", LogLevel.Critical);

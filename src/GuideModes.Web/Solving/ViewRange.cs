@@ -67,7 +67,7 @@ internal static class ViewRange
 /// <summary>n(x) along the pieces of a profile; at a jump the coordinate stands twice.</summary>
 internal sealed record ProfileSamples(List<double> XUm, List<double> Index)
 {
-    private const int PerProfile = 600;
+    private const int PerProfile = 900;
 
     private const int LeastPerPiece = 12;
 

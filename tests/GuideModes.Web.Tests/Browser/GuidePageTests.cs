@@ -29,7 +29,7 @@ public sealed class GuidePageTests(BrowserHost host)
         await page.GetByRole(AriaRole.Button, new() { Name = "TM1", Exact = true }).ClickAsync();
         Assert.Equal("Mode TM1", await page.Locator("#mode-title").TextContentAsync());
 
-        var levels = await page.EvaluateAsync<int>("() => document.getElementById('profile-plot').data.filter(t => t.name.includes('n_eff')).length");
+        var levels = await page.EvaluateAsync<int>("() => document.getElementById('profile-plot').data.filter(t => t.name === 'levels').reduce((names, t) => names.concat([...new Set(t.text)]), []).length");
         Assert.Equal(await Count(page), levels);
         Assert.Empty(complaints);
     }

@@ -81,6 +81,6 @@ internal static class SingularEnds
 
         public override double IndexSquared(double x) => _start + _slope * (x - Extent.Start);
 
-        public override Jet Jet(double x) => new(IndexSquared(x), _slope, 0, _dispersion, 0);
+        public override Jet Jet(double x) => new(IndexSquared(x), _slope, 0, 0, _dispersion);
     }
 }

@@ -20,6 +20,9 @@ public sealed class GuideSession(SolveService solver, ILogger<GuideSession> log)
 {
     private const int LongestHistory = 500;
 
+    /// <summary>An answer that comes within this is shown at once; only a longer wait is announced.</summary>
+    private static readonly TimeSpan Grace = TimeSpan.FromMilliseconds(60);
+
     private readonly List<GuideDocument> _past = [];
     private readonly Stack<GuideDocument> _future = [];
     private CancellationTokenSource? _run;
@@ -104,7 +107,7 @@ public sealed class GuideSession(SolveService solver, ILogger<GuideSession> log)
         Faults = reading.Faults;
         IsBusy = reading.Guide is not null;
         if (reading.Guide is { } guide) _ = SolveAsync(document, guide, _run = new CancellationTokenSource());
-        Changed?.Invoke();
+        else Changed?.Invoke();
     }
 
     private async Task SolveAsync(GuideDocument document, Guide guide, CancellationTokenSource run)
@@ -113,7 +116,9 @@ public sealed class GuideSession(SolveService solver, ILogger<GuideSession> log)
         string? trouble = null;
         try
         {
-            solved = new(document, await solver.SolveAsync(guide, run.Token));
+            var solving = solver.SolveAsync(guide, run.Token);
+            if (await Task.WhenAny(solving, Task.Delay(Grace, run.Token)) != solving && !run.IsCancellationRequested) Changed?.Invoke();
+            solved = new(document, await solving);
         }
         catch (OperationCanceledException)
         {

@@ -8,7 +8,11 @@ namespace GuideModes.Web.Components.Pages.Guides.Plots;
 /// <param name="Slot">Which of the series colours it wears; −1 for none of its own.</param>
 /// <param name="Start">Where its x values start; its y values follow them.</param>
 /// <param name="Count">How many points it has.</param>
-public sealed record PlotCurve(string Role, string Name, int Slot, int Start, int Count);
+/// <param name="Parts">The names of its parts where it has any: one curve of many parts is drawn faster than many curves.</param>
+public sealed record PlotCurve(string Role, string Name, int Slot, int Start, int Count, IReadOnlyList<PlotPart>? Parts = null);
+
+/// <summary>So many points of a curve, and what they are called.</summary>
+public sealed record PlotPart(string Name, int Count);
 
 /// <summary>A label beside a curve.</summary>
 public sealed record PlotLabel(string Text, double X, double Y, int Slot);
@@ -36,9 +40,9 @@ internal sealed class PlotPacket
 
     public byte[] Bytes => MemoryMarshal.AsBytes(CollectionsMarshal.AsSpan(_numbers)).ToArray();
 
-    public void Add(string role, string name, int slot, IReadOnlyCollection<double> x, IReadOnlyCollection<double> y)
+    public void Add(string role, string name, int slot, IReadOnlyCollection<double> x, IReadOnlyCollection<double> y, IReadOnlyList<PlotPart>? parts = null)
     {
-        _curves.Add(new(role, name, slot, _numbers.Count, x.Count));
+        _curves.Add(new(role, name, slot, _numbers.Count, x.Count, parts));
         _numbers.AddRange(x);
         _numbers.AddRange(y);
     }

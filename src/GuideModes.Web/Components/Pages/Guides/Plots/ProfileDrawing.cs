@@ -31,7 +31,7 @@ internal static class ProfileDrawing
         var cutoff = Math.Sqrt(profile.CutoffIndexSquared);
         var top = Math.Max(samples.Index.Max(), cutoff);
         var span = Math.Max(top - Math.Min(cutoff, samples.Index.Max()), 1e-6 * top);
-        foreach (var mode in answer.Modes) AddLevel(packet, answer, mode, view, chosen);
+        AddLevels(packet, answer, view, chosen);
         AddLabels(packet, answer, chosen, span);
         var highest = AddFields(packet, answer, view, chosen, span);
 
@@ -42,20 +42,29 @@ internal static class ProfileDrawing
     }
 
     /// <summary>A level runs between its turning points; where the asymptotic engine names none, across the view.</summary>
-    private static void AddLevel(PlotPacket packet, GuideAnswer answer, CertifiedMode mode, Interval view, IReadOnlyList<int> chosen)
+    private static void AddLevels(PlotPacket packet, GuideAnswer answer, Interval view, IReadOnlyList<int> chosen)
     {
-        var slot = Slot(chosen, mode.Exact.Order);
-        var n = mode.Exact.EffectiveIndex.Value;
-        var turns = mode.Wkb?.TurningPointsUm is { Length: >= 2 } points ? points : [view.Start, view.End];
-        List<double> x = [];
-        List<double> y = [];
-        for (var i = 0; i + 1 < turns.Length; i += 2)
+        foreach (var group in answer.Modes.GroupBy(mode => Slot(chosen, mode.Exact.Order)))
         {
-            x.AddRange([turns[i], turns[i + 1], double.NaN]);
-            y.AddRange([n, n, double.NaN]);
-        }
+            List<double> x = [];
+            List<double> y = [];
+            List<PlotPart> parts = [];
+            foreach (var mode in group)
+            {
+                var n = Level(mode);
+                var turns = mode.Wkb?.TurningPointsUm is { Length: >= 2 } points ? points : [view.Start, view.End];
+                var before = x.Count;
+                for (var i = 0; i + 1 < turns.Length; i += 2)
+                {
+                    x.AddRange([turns[i], turns[i + 1], double.NaN]);
+                    y.AddRange([n, n, double.NaN]);
+                }
 
-        packet.Add("level", $"{mode.Label}  n_eff = {Format.Bracketed(mode.Exact.EffectiveIndex)}", slot, x, y);
+                parts.Add(new($"{mode.Label}  n_eff = {Format.Bracketed(mode.Exact.EffectiveIndex)}", x.Count - before));
+            }
+
+            packet.Add("level", "levels", group.Key, x, y, parts);
+        }
     }
 
     /// <summary>Names stand at the right end of their levels; levels too close to be told apart share a line.</summary>
