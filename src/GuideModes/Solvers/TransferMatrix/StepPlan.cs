@@ -16,6 +16,9 @@ internal sealed class StepPlan
     /// <summary>A step this much shorter than its piece is taken as it is: only a singular end of a piece asks for less.</summary>
     private const double ShortestRelativeStep = 1e-7;
 
+    /// <summary>In radians of the vacuum wave: from here down a step's error is weighed by its length.</summary>
+    private const double ShortStep = 0.01;
+
     private const double LargestVariation = 2;
 
     private readonly ModeProblem _problem;
@@ -117,6 +120,12 @@ internal sealed class StepPlan
             var length = remaining / Math.Ceiling(remaining / wanted * (1 - 1e-12));
             var step = new Step(at, length >= remaining * (1 - 1e-12) ? extent.End : at + length, piece);
             var factor = Acceptance(step, tolerance, series);
+            if (double.IsNaN(factor))
+            {
+                IsComplete = false;
+                return;
+            }
+
             if (factor < 1 && length > ShortestRelativeStep * extent.Length)
             {
                 wanted = length * Math.Max(factor, 0.2);
@@ -155,7 +164,8 @@ internal sealed class StepPlan
         for (var j = 0; j < monomials.Length; j++) monomials[j] *= h * h;
         series.Build(monomials);
         var tail = (Math.Abs(legendre[GaussRule.Degree]) + Math.Abs(legendre[GaussRule.Degree - 1])) * Coupling(Math.Max(phase, decay));
-        var error = tail + series.Remainder / (h * h);
+        // A change of the potential counts by the share of the mode it meets; a step far shorter than a wave meets little of it.
+        var error = (tail + series.Remainder / (h * h)) * Math.Min(1, h * _wavenumber / ShortStep);
         return Math.Min(longest, 0.9 * Math.Pow(tolerance / Math.Max(error, 1e-300), 1.0 / 9));
     }
 

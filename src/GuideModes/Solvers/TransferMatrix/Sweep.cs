@@ -99,7 +99,7 @@ internal sealed class Sweep(StepMesh mesh)
     }
 
     /// <summary>A step's matrix in units of its length, lanes (11, 21, 12, 22), its derivative in Z, and the logarithm both must be scaled by.</summary>
-    private (Vector256<double> T, Vector256<double> DT, double Log) Matrices(int step, double energy)
+    internal (Vector256<double> T, Vector256<double> DT, double Log) Matrices(int step, double energy)
     {
         var h = Mesh.Length[step];
         var z = (Mesh.Mean[step] - energy) * h * h;

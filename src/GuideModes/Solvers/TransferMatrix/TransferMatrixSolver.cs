@@ -19,6 +19,8 @@ public sealed record TransferMatrixSolver(double IndexTolerance = 2e-13, int Max
     /// <exception cref="OperationCanceledException">The caller lost interest.</exception>
     public TransferMatrixSolution Solve(ModeProblem problem, CancellationToken cancellation = default)
     {
+        ArgumentNullException.ThrowIfNull(problem);
+        (problem, var capError) = SingularEnds.Capped(problem);
         var plan = StepPlan.For(problem, IndexTolerance, cancellation);
         if (!plan.IsComplete) return new(SearchOutcome.Unresolved, [], []);
         if (plan.LowestPotential >= 0) return new(SearchOutcome.Complete, [], []);
@@ -35,18 +37,18 @@ public sealed record TransferMatrixSolver(double IndexTolerance = 2e-13, int Max
         {
             cancellation.ThrowIfCancellationRequested();
             var (energy, step) = ModeSearch.Polish(fine, m, found[m].Energy, 2 * found[m].Match, found[m].Scale);
-            modes.Add(integrals.Describe(m, found[m], Index(energy, step + found[m].Error, problem.Profile, fine.Mesh.Count)));
+            modes.Add(integrals.Describe(m, found[m], Index(energy, step + found[m].Error, problem.Profile, fine.Mesh.Count, capError)));
         }
 
         return new(SearchOutcome.Complete, modes.MoveToImmutable(), [.. found], coarse.Mesh);
     }
 
     /// <summary>n_eff from E, with the two meshes' difference and a floor for what rounding does over many steps.</summary>
-    private static Estimate Index(double energy, double difference, IndexProfile profile, int steps)
+    private static Estimate Index(double energy, double difference, IndexProfile profile, int steps, double capError)
     {
         var k = profile.Wavelength.Wavenumber;
         var index = Math.Sqrt(profile.CutoffIndexSquared - energy / (k * k));
         var rounding = (8 + Math.Sqrt(steps)) * 2.3e-16 * index;
-        return new(index, difference / (2 * k * k * index) + rounding);
+        return new(index, difference / (2 * k * k * index) + rounding + capError);
     }
 }

@@ -1,5 +1,3 @@
-using MathNet.Numerics;
-
 namespace GuideModes.Solvers.Wkb;
 
 /// <summary>The phase of the Airy functions on the oscillating side: Ai(−ζ) = M cos θ, Bi(−ζ) = −M sin θ.</summary>
@@ -14,8 +12,7 @@ internal readonly record struct AiryPhase(double Theta, double Rate, double Half
 {
     public static AiryPhase At(double zeta)
     {
-        var (ai, bi) = (SpecialFunctions.AiryAi(-zeta), SpecialFunctions.AiryBi(-zeta));
-        var (aiSlope, biSlope) = (SpecialFunctions.AiryAiPrime(-zeta), SpecialFunctions.AiryBiPrime(-zeta));
+        var (ai, aiSlope, bi, biSlope) = AiryTable.At(-zeta);
         var modulusSquared = ai * ai + bi * bi;
         var theta = -Math.Atan2(bi, ai);
         var expected = 2.0 / 3 * zeta * Math.Sqrt(zeta) - Math.PI / 4;

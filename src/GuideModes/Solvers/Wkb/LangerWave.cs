@@ -1,5 +1,3 @@
-using MathNet.Numerics;
-
 namespace GuideModes.Solvers.Wkb;
 
 /// <summary>The Airy function in the shape that Langer's field needs: √π |ζ|^¼ Ai(∓|ζ|) as a function of the phase ξ = ⅔|ζ|^(3/2).</summary>
@@ -22,7 +20,7 @@ internal static class LangerWave
         }
 
         var zeta = Math.Pow(1.5 * xi, 2.0 / 3);
-        return Math.Sqrt(Math.PI * Math.Sqrt(zeta)) * SpecialFunctions.AiryAi(-zeta);
+        return Math.Sqrt(Math.PI * Math.Sqrt(zeta)) * AiryTable.At(-zeta).Ai;
     }
 
     public static double Decaying(double xi)
@@ -34,6 +32,6 @@ internal static class LangerWave
         }
 
         var zeta = Math.Pow(1.5 * xi, 2.0 / 3);
-        return Math.Sqrt(Math.PI * Math.Sqrt(zeta)) * SpecialFunctions.AiryAi(zeta);
+        return Math.Sqrt(Math.PI * Math.Sqrt(zeta)) * AiryTable.At(zeta).Ai;
     }
 }

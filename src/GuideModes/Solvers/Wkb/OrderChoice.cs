@@ -20,7 +20,8 @@ internal sealed class OrderChoice(ProfileMap map, WellFinder finder, WellPhase p
     /// <summary>The fourth-order term is kept when below this share of the second (experience with x⁴, whose lowest mode it makes worse).</summary>
     private const double FourthShare = 0.2;
 
-    private const double SearchTolerance = 1e-10;
+    private const int MostPasses = 8;
+    private const double SearchTolerance = 1e-12;
 
     public LevelSample Sample(WellNode node, double level, PhaseKind kind)
     {
@@ -133,16 +134,24 @@ internal sealed class OrderChoice(ProfileMap map, WellFinder finder, WellPhase p
     /// <summary>n_eff² to fourth order, and the change of n_eff it makes.</summary>
     private (double Level, double Moved) Fourth(FoundMode mode, double second)
     {
-        var level = second;
-        for (var pass = 0; pass < 3; pass++)
+        var (node, order) = (mode.Node, mode.OrderInWell);
+        var plain = mode.SecondOrder!.Value * mode.SecondOrder.Value;
+        var level = plain;
+        for (var pass = 0; pass < MostPasses; pass++)
         {
             finder.Find(level);
-            if (!phase.TrySmooth(finder.Holding(mode.Node.Anchor), level, true, out var smooth)) return (second, double.PositiveInfinity);
-            level = second + smooth.Fourth * 2 / (map.Wavenumber * smooth.InverseRoot);
-            if (!(level > mode.Node.Lower && level < mode.Node.Upper)) return (second, double.PositiveInfinity);
+            if (!phase.TrySmooth(finder.Holding(node.Anchor), level, true, out var here)) return (second, double.PositiveInfinity);
+            var target = order - here.Fourth / Math.PI;
+            var next = LevelSearch.Find(e => SmoothSample(node, e), target, node.Lower, node.Upper, level, SearchTolerance);
+            if (Math.Abs(next.Number - target) > 1e-9) return (second, double.PositiveInfinity);
+            var change = Math.Abs(next.Level - level);
+            level = next.Level;
+            if (change < 1e-14 * level) break;
         }
 
-        return (level, Math.Abs(Index(level) - Index(second)));
+        var moved = Index(level) - Index(plain);
+        var index = Index(second) + moved;
+        return (index * index, Math.Abs(moved));
     }
 
     /// <summary>The textbook first-order index; null where it has no solution.</summary>

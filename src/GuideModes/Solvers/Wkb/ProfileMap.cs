@@ -25,6 +25,7 @@ internal sealed class ProfileMap
     private const int DeepestHalving = 10;
     private readonly List<Segment> segments = [];
     private readonly double range;
+    private readonly int[] firstSegments;
 
     public ProfileMap(ModeProblem problem)
     {
@@ -48,6 +49,9 @@ internal sealed class ProfileMap
         }
 
         Segments = [.. segments];
+        firstSegments = new int[pieces.Length + 1];
+        foreach (var segment in Segments) firstSegments[segment.Piece + 1]++;
+        for (var i = 0; i < pieces.Length; i++) firstSegments[i + 1] += firstSegments[i];
     }
 
     public IndexProfile Profile { get; }
@@ -59,6 +63,9 @@ internal sealed class ProfileMap
 
     /// <summary>From left to right, without gaps.</summary>
     public Segment[] Segments { get; }
+
+    /// <summary>The segments of one piece.</summary>
+    public ReadOnlySpan<Segment> SegmentsOf(int piece) => Segments.AsSpan(firstSegments[piece]..firstSegments[piece + 1]);
 
     /// <summary>n² with its derivatives at the start of each piece.</summary>
     public Jet[] Starts { get; }

@@ -1,5 +1,4 @@
 using GuideModes.Numerics;
-using MathNet.Numerics;
 
 namespace GuideModes.Solvers.Wkb;
 
@@ -45,26 +44,61 @@ internal sealed class WellPhase(ProfileMap map, WellFinder finder, PhaseIntegral
     private readonly double k = map.Wavenumber;
 
     /// <summary>The phase of a well that the finder holds for this level.</summary>
+    /// <remarks>
+    /// S is carried from the left to each arc in turn, and what the right end asks for is carried back to it. The two differ by the same
+    /// multiple of π at a mode wherever they are compared; between modes a joint bends the scale. Where a joint is near the right turning
+    /// point they are compared on its left, so that ν stays continuous while the turning point crosses it.
+    /// </remarks>
     public PhaseValue Evaluate(double level, int wellIndex, PhaseKind kind)
     {
         var well = finder.Wells[wellIndex];
-        double phase = 0, inverse = 0, shift = 0;
+        Span<double> starts = well.Count <= 128 ? stackalloc double[well.Count] : new double[well.Count];
+        Span<double> lengths = well.Count <= 128 ? stackalloc double[well.Count] : new double[well.Count];
+        Span<Joint> joints = well.Count <= 128 ? stackalloc Joint[well.Count] : new Joint[well.Count];
+        double inverse = 0, shift = 0, action = 0, before = 0;
         for (var i = 0; i < well.Count; i++)
         {
             var arc = finder.Arcs[well.First + i];
-            var action = integral.Over(arc.Piece, level, arc.Left, arc.Right, arc.LeftTurning, arc.RightTurning, arc.Split);
-            var full = k * action.Root;
-            inverse += action.InverseRoot;
-            phase = i == 0
-                ? -End(arc, level, -1, full, kind, ref shift)
-                : Cross(finder.Arcs[well.First + i - 1], arc, level, phase, previousAction, full, kind, ref shift);
-            phase += full;
-            if (kind == PhaseKind.SecondOrder) phase += SecondOrder(arc, level);
-            previousAction = full;
+            var over = integral.Over(arc.Piece, level, arc.Left, arc.Right, arc.LeftTurning, arc.RightTurning, arc.Split);
+            (before, action) = (action, k * over.Root);
+            inverse += over.InverseRoot;
+            lengths[i] = action + (kind == PhaseKind.SecondOrder ? SecondOrder(arc, level) : 0);
+            if (i == 0)
+            {
+                starts[0] = -End(arc, level, -1, action, kind, ref shift);
+                continue;
+            }
+
+            joints[i] = JointAt(finder.Arcs[well.First + i - 1], arc, level, before, action, kind);
+            var phase = starts[i - 1] + lengths[i - 1];
+            starts[i] = joints[i].Across(phase);
+            if (joints[i].Blend > 0) shift += Math.Abs(starts[i] - phase);
         }
 
-        var last = finder.Arcs[well.First + well.Count - 1];
-        return new(phase - End(last, level, 1, previousAction, kind, ref shift), inverse, shift);
+        var wanted = End(finder.Arcs[well.First + well.Count - 1], level, 1, action, kind, ref shift) - lengths[^1];
+        var excess = starts[^1] - wanted;
+        for (var i = well.Count - 1; i > 0; i--)
+        {
+            wanted = joints[i].Back(wanted) - lengths[i - 1];
+            if (joints[i].NearRight > 0) excess += joints[i].NearRight * (starts[i - 1] - wanted - excess);
+        }
+
+        return new(excess, inverse, shift);
+    }
+
+    /// <summary>How S passes an interior joint: tan S₂ = α tan S₁ + δ at the joint itself, and the offsets of the cosine forms there.</summary>
+    private readonly record struct Joint(double Alpha, double Delta, double LeftOffset, double RightOffset, double NearRight, double Blend)
+    {
+        public double Across(double phase) => Bend(phase + LeftOffset, Alpha, Delta) + RightOffset;
+
+        public double Back(double phase) => Bend(phase - RightOffset, 1 / Alpha, -Delta / Alpha) - LeftOffset;
+
+        private static double Bend(double phase, double alpha, double delta)
+        {
+            var turns = Math.Round(phase / Math.PI) * Math.PI;
+            var (sin, cos) = Math.SinCos(phase - turns);
+            return turns + Math.Atan2(alpha * sin + delta * cos, cos);
+        }
     }
 
     /// <summary>First-order phases for a field: S at the start of each arc and what each adds; the phase in excess of the ends' own is returned.</summary>
@@ -78,7 +112,7 @@ internal sealed class WellPhase(ProfileMap map, WellFinder finder, PhaseIntegral
             length[i] = k * integral.Over(arc.Piece, level, arc.Left, arc.Right, arc.LeftTurning, arc.RightTurning, arc.Split).Root;
             start[i] = i == 0
                 ? -End(arc, level, -1, length[0], PhaseKind.Classic, ref none)
-                : Cross(finder.Arcs[well.First + i - 1], arc, level, start[i - 1] + length[i - 1], 0, 0, PhaseKind.Classic, ref none);
+                : JointAt(finder.Arcs[well.First + i - 1], arc, level, 0, 0, PhaseKind.Classic).Across(start[i - 1] + length[i - 1]);
         }
 
         var last = finder.Arcs[well.First + well.Count - 1];
@@ -153,8 +187,6 @@ internal sealed class WellPhase(ProfileMap map, WellFinder finder, PhaseIntegral
         return s.D1 / (q * Math.Sqrt(q) * k);
     }
 
-    private double previousAction;
-
     private Jet JetAt(in Arc arc, int side) => side > 0 ? map.Ends[arc.Piece] : map.Starts[arc.Piece];
 
     /// <summary>The end phase φ on one side (−1 left, +1 right).</summary>
@@ -196,22 +228,21 @@ internal sealed class WellPhase(ProfileMap map, WellFinder finder, PhaseIntegral
         return near < 0 ? map.LeftOf(joint) / map.RightOf(joint) : map.RightOf(joint) / map.LeftOf(joint);
     }
 
-    /// <summary>The phase S on the far side of an interior joint.</summary>
-    private double Cross(in Arc from, in Arc to, double level, double phase, double actionFrom, double actionTo, PhaseKind kind, ref double shift)
+    private Joint JointAt(in Arc from, in Arc to, double level, double actionFrom, double actionTo, PhaseKind kind)
     {
         var joint = to.Piece;
-        if (kind == PhaseKind.Classic && !map.IsStep(joint)) return phase;
+        if (kind == PhaseKind.Classic && !map.IsStep(joint)) return new(1, 0, 0, 0, 0, 0);
         var left = SideAt(from, level, 1, actionFrom, kind);
         var right = SideAt(to, level, -1, actionTo, kind);
         var ratio = Ratio(joint, 1);
-        var before = phase + left.Offset;
-        var turns = Math.Round(before / Math.PI) * Math.PI;
-        var (sin, cos) = Math.SinCos(before - turns);
-        var drive = ratio * (left.Rate * sin + (left.AmplitudeSlope - left.MediumSlope) * cos)
-            + (right.AmplitudeSlope - right.MediumSlope) * cos;
-        var after = turns + Math.Atan2(drive, right.Rate * cos) + right.Offset;
-        if (left.Blend > 0 || right.Blend > 0) shift += Math.Abs(after - phase);
-        return after;
+        var delta = ratio * (left.AmplitudeSlope - left.MediumSlope) + right.AmplitudeSlope - right.MediumSlope;
+        return new(
+            ratio * left.Rate / right.Rate,
+            delta / right.Rate,
+            left.Offset,
+            right.Offset,
+            right.Inward ? right.Blend : 0,
+            Math.Max(left.Blend, right.Blend));
     }
 
     /// <summary>What the field does at the inner side of a joint.</summary>
@@ -220,7 +251,8 @@ internal sealed class WellPhase(ProfileMap map, WellFinder finder, PhaseIntegral
     /// <param name="MediumSlope">s′/(2s), outward (TM)</param>
     /// <param name="Offset">The phase at the joint less what the cosine form says of it, outward.</param>
     /// <param name="Blend">The weight of the Airy form.</param>
-    private readonly record struct Side(double Rate, double AmplitudeSlope, double MediumSlope, double Offset, double Blend);
+    /// <param name="Inward">True where the turning point of that form lies inside the well.</param>
+    private readonly record struct Side(double Rate, double AmplitudeSlope, double MediumSlope, double Offset, double Blend, bool Inward = false);
 
     private Side SideAt(in Arc arc, double level, int side, double action, PhaseKind kind)
     {
@@ -254,7 +286,8 @@ internal sealed class WellPhase(ProfileMap map, WellFinder finder, PhaseIntegral
             plain.AmplitudeSlope + at.Weight * (sign * amplitude - plain.AmplitudeSlope),
             plain.MediumSlope,
             at.Weight * sign * offset,
-            at.Weight);
+            at.Weight,
+            !at.Outward);
     }
 
     /// <summary>The virtual turning point beyond the other end of an arc.</summary>
@@ -313,7 +346,8 @@ internal sealed class WellPhase(ProfileMap map, WellFinder finder, PhaseIntegral
         var medium = map.IsTransverseMagnetic && kind == PhaseKind.SecondOrder ? side * s.D1 / (2 * s.Value) : 0;
         var log = -Ratio(joint, -side) * DecayRate(joint, side, level, kind, 0) - medium;
         var (fall, rise) = EdgeRates(s, level, side, z, kind);
-        return Math.Atan2((log + fall) * SpecialFunctions.AiryAi(z), (rise - log) * SpecialFunctions.AiryBi(z));
+        var airy = AiryTable.At(z);
+        return Math.Atan2((log + fall) * airy.Ai, (rise - log) * airy.Bi);
     }
 
     /// <summary>
@@ -351,9 +385,9 @@ internal sealed class WellPhase(ProfileMap map, WellFinder finder, PhaseIntegral
         var (low, high) = (Math.Min(a, b), Math.Max(a, b));
         double least = 0;
         dark = true;
-        foreach (ref readonly var segment in map.Segments.AsSpan())
+        foreach (ref readonly var segment in map.SegmentsOf(piece))
         {
-            if (segment.Piece != piece || segment.Right <= low || segment.Left >= high) continue;
+            if (segment.Right <= low || segment.Left >= high) continue;
             var whole = segment.Left >= low && segment.Right <= high;
             if (whole && segment.Most > level) dark = false;
             var (from, to) = (Math.Max(low, segment.Left), Math.Min(high, segment.Right));
@@ -421,8 +455,8 @@ internal sealed class WellPhase(ProfileMap map, WellFinder finder, PhaseIntegral
         var weight = Far(z);
         if (weight == 0) return plain;
         var far = Math.Pow(z * Math.Sqrt(z) + 1.5 * action, 2.0 / 3);
-        var airy = SpecialFunctions.AiryAi(far) * SpecialFunctions.AiryBi(z) / (SpecialFunctions.AiryBi(far) * SpecialFunctions.AiryAi(z));
-        return weight * airy + (1 - weight) * plain;
+        var (there, here) = (AiryTable.At(far), AiryTable.At(z));
+        return weight * there.Ai * here.Bi / (there.Bi * here.Ai) + (1 - weight) * plain;
     }
 
     /// <summary>The outward rates of the falling and the rising solution at the edge of a graded barrier.</summary>
@@ -440,7 +474,9 @@ internal sealed class WellPhase(ProfileMap map, WellFinder finder, PhaseIntegral
         return (weight * fall + (1 - weight) * (gamma + bend), weight * rise + (1 - weight) * (gamma - bend));
     }
 
-    private static (double Fall, double Rise) AiryRates(double z, double scale) => (
-        -scale * SpecialFunctions.AiryAiPrime(z) / SpecialFunctions.AiryAi(z),
-        scale * SpecialFunctions.AiryBiPrime(z) / SpecialFunctions.AiryBi(z));
+    private static (double Fall, double Rise) AiryRates(double z, double scale)
+    {
+        var airy = AiryTable.At(z);
+        return (-scale * airy.AiSlope / airy.Ai, scale * airy.BiSlope / airy.Bi);
+    }
 }
