@@ -9,7 +9,7 @@ public sealed class WorkBudgetException(string message) : Exception(message);
 
 /// <summary>Runs the engines on the thread pool: a few guides at a time, each within a stated time.</summary>
 /// <remarks>The caller is answered within the budget even where an engine is slow to notice. Safe to share between threads; one per process.</remarks>
-public sealed class SolveService
+public sealed class SolveService : IDisposable
 {
     /// <summary>How long one guide may take, its sampled fields included.</summary>
     public static readonly TimeSpan Budget = TimeSpan.FromSeconds(10);
@@ -45,6 +45,8 @@ public sealed class SolveService
                 + "Fewer regions, a smoother profile or a smaller ratio of thickness to wavelength make it lighter.");
         }
     }
+
+    public void Dispose() => _places.Dispose();
 
     /// <summary>The place is free when the work has really ended, which may be a while after its caller was told.</summary>
     private void Free(Task ended, CancellationTokenSource limited)
