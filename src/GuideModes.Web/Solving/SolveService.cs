@@ -8,7 +8,7 @@ namespace GuideModes.Web.Solving;
 public sealed class WorkBudgetException(string message) : Exception(message);
 
 /// <summary>Runs the engines on the thread pool: a few guides at a time, each within a stated time.</summary>
-/// <remarks>Safe to share between threads; one per process.</remarks>
+/// <remarks>The caller is answered within the budget even where an engine is slow to notice. Safe to share between threads; one per process.</remarks>
 public sealed class SolveService : IDisposable
 {
     /// <summary>How long one guide may take, its sampled fields included.</summary>
@@ -29,11 +29,14 @@ public sealed class SolveService : IDisposable
     {
         if (!await _places.WaitAsync(Patience, cancellation))
             throw new WorkBudgetException("Other guides are keeping the engines busy. Try again in a moment.");
+        var limited = CancellationTokenSource.CreateLinkedTokenSource(cancellation);
+        var limit = limited.Token;
+        limited.CancelAfter(Budget);
+        var work = Task.Run(() => shape(Checked(GuideAnswer.Solve(guide, limit)), limit), limit);
+        _ = work.ContinueWith(ended => Free(ended, limited), CancellationToken.None, TaskContinuationOptions.ExecuteSynchronously, TaskScheduler.Default);
         try
         {
-            using var limited = CancellationTokenSource.CreateLinkedTokenSource(cancellation);
-            limited.CancelAfter(Budget);
-            return await Task.Run(() => shape(Checked(GuideAnswer.Solve(guide, limited.Token)), limited.Token), limited.Token);
+            return await work.WaitAsync(limit);
         }
         catch (OperationCanceledException) when (!cancellation.IsCancellationRequested)
         {
@@ -41,13 +44,17 @@ public sealed class SolveService : IDisposable
                 $"This guide takes more than the {Budget.TotalSeconds:0} s that one guide may take. "
                 + "Fewer regions, a smoother profile or a smaller ratio of thickness to wavelength make it lighter.");
         }
-        finally
-        {
-            _places.Release();
-        }
     }
 
     public void Dispose() => _places.Dispose();
+
+    /// <summary>The place is free when the work has really ended, which may be a while after its caller was told.</summary>
+    private void Free(Task ended, CancellationTokenSource limited)
+    {
+        _ = ended.Exception;
+        limited.Dispose();
+        _places.Release();
+    }
 
     /// <summary>An answer that had to stop short is told as too much work, in the engines' own sentence.</summary>
     private static GuideAnswer Checked(GuideAnswer answer) => answer.Outcome == SearchOutcome.Complete

@@ -6,16 +6,9 @@ namespace GuideModes.Web.Tests.Components;
 
 public sealed class GuideSessionTests : IDisposable
 {
-    private readonly SolveService _solver = new();
-    private readonly GuideSession _session;
+    private readonly GuideSession _session = new(new SolveService(), NullLogger<GuideSession>.Instance);
 
-    public GuideSessionTests() => _session = new(_solver, NullLogger<GuideSession>.Instance);
-
-    public void Dispose()
-    {
-        _session.Dispose();
-        _solver.Dispose();
-    }
+    public void Dispose() => _session.Dispose();
 
     [Fact]
     public async Task Open_Guide_IsSolved()
