@@ -6,8 +6,8 @@ namespace GuideModes.Tests.Properties;
 public sealed class BracketTests
 {
     [Theory]
-    [InlineData(2e-15)]
-    [InlineData(1e-13)]
+    [InlineData(2e-16)]
+    [InlineData(1e-14)]
     public void Bracket_OfTheDefaultSolver_HoldsTheAnswerOfASharperOne(double tolerance) => Property.Holds(
         RandomGuides.Any,
         guide =>

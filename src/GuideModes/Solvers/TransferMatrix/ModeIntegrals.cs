@@ -13,7 +13,7 @@ namespace GuideModes.Solvers.TransferMatrix;
 internal sealed class ModeIntegrals
 {
     /// <summary>Steps whose field squared is this small beside that at the match add nothing.</summary>
-    private const double Negligible = 1e-40;
+    private const double Negligible = 1e-30;
 
     private readonly Sweep _sweep;
     private readonly Vector256<double>[] _nodes;

@@ -8,7 +8,7 @@ namespace GuideModes.Solvers.TransferMatrix;
 /// </summary>
 /// <remarks>
 /// A step ends where its piece ends. At any β a mode can have it is no longer than <see cref="Radians"/>, fewer than π, so that
-/// a field has at most one zero in it (Sturm), and than <see cref="Nepers"/>, so that running against the growth costs few digits.
+/// a field has at most one zero in it (Sturm), and than <see cref="Nepers"/>, so that its integrals are exact and running against the growth costs no digits.
 /// </remarks>
 internal sealed class StepMesh
 {
@@ -18,8 +18,8 @@ internal sealed class StepMesh
     /// <summary>The longest step in radians of phase.</summary>
     public const double Radians = 2.0;
 
-    /// <summary>The longest step in nepers of decay: e⁶ε is 1e-13.</summary>
-    public const double Nepers = 6;
+    /// <summary>The longest step in nepers of decay: what the seven points of the integrals still take in to eleven digits.</summary>
+    public const double Nepers = 2.5;
 
     private readonly double[] _legendre;
 

@@ -13,7 +13,7 @@ namespace GuideModes.Solvers.TransferMatrix;
 /// </remarks>
 /// <param name="IndexTolerance">What a step of the coarser mesh may contribute to the error of n_eff.</param>
 /// <param name="MaximumModes">More modes than this are not looked for.</param>
-public sealed record TransferMatrixSolver(double IndexTolerance = 2e-13, int MaximumModes = 2000)
+public sealed record TransferMatrixSolver(double IndexTolerance = 2e-14, int MaximumModes = 2000)
 {
     /// <summary>Finds every guided mode.</summary>
     /// <exception cref="OperationCanceledException">The caller lost interest.</exception>
