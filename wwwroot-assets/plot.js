@@ -73,10 +73,14 @@ function layout(sheet, view, colour, narrow) {
   };
 }
 
+// An edit is watched on the profile: the fields give it a moment's start.
+const profileFirst = () => new Promise((resolve) => setTimeout(resolve, 30));
+
 async function render(id) {
   const held = drawn.get(id);
   const canvas = document.getElementById(id);
   const library = await plotly();
+  if (held?.sheet.kind === "field") await profileFirst();
   if (!held || !canvas || held !== drawn.get(id)) return;
   const colour = colours();
   const { sheet, numbers } = held;
