@@ -32,6 +32,12 @@ public sealed record PowerLaw(
     {
         var center = Quantity.Of(NCenter.At(wavelength));
         var edge = Quantity.Of(NEdge.At(wavelength));
-        return new ShapePiece<TShape>(extent, region, Quantity, center, edge - center, shape, CenterUm, HalfWidthUm);
+        return new ShapePiece<TShape>(extent, region, Quantity, center, edge - center, shape, CenterOf(extent), HalfWidthUm);
     }
+
+    /// <summary>The centre, moved onto the end of the stretch that it cannot be told from, so that what is singular there stands at the end.</summary>
+    private double CenterOf(Interval extent) =>
+        Splitting.AreOne(CenterUm, extent.Start) ? extent.Start
+        : Splitting.AreOne(CenterUm, extent.End) ? extent.End
+        : CenterUm;
 }
