@@ -11,6 +11,8 @@ namespace GuideModes.Solvers.Certification;
 /// <remarks>Immutable and safe to share between threads.</remarks>
 public sealed class GuideAnswer
 {
+    private static readonly int MostModes = new TransferMatrixSolver().MaximumModes;
+
     private readonly TransferMatrixSolution _exact;
     private readonly ModeProblem _problem;
 
@@ -20,7 +22,8 @@ public sealed class GuideAnswer
         _problem = problem;
         _exact = exact;
         WkbModeNumber = wkb.ModeNumberAtCutoff;
-        Outcome = exact.Outcome;
+        // A guide of very many modes may exhaust the exact solver's steps before it has counted them.
+        Outcome = exact.Outcome == SearchOutcome.Unresolved && wkb.ModeNumberAtCutoff > MostModes ? SearchOutcome.TooManyModes : exact.Outcome;
         var verdict = new Verdict(guide.Profile, guide.Polarization, exact, wkb);
         Modes = [.. exact.Modes.Select(verdict.On)];
         Remarks = Sentences();
@@ -67,7 +70,7 @@ public sealed class GuideAnswer
     private ImmutableArray<string> Sentences()
     {
         if (Outcome == SearchOutcome.TooManyModes)
-            return [Say($"The guide holds more than {new TransferMatrixSolver().MaximumModes} modes (about {WkbModeNumber:0} by WKB); the exact solver does not list so many.")];
+            return [Say($"The guide holds more than {MostModes} modes (about {WkbModeNumber:0} by WKB); the exact solver does not list so many.")];
         if (Outcome == SearchOutcome.Unresolved)
             return ["The profile has features too fine to resolve in the allowed number of steps; no mode is given rather than a doubtful one."];
         if (Modes.IsEmpty) return [WhyNothingIsGuided()];
