@@ -45,7 +45,7 @@ public static class LawCatalogue
             Parameters =
             [
                 Index("nCenter", "Index at center", "1.53"), Index("nEdge", "Index at edge", "1.51"), Length("halfWidthUm", "Half-width", "5"),
-                new("alpha", "Alpha", LawParameterKind.Number, GuideLimits.Alpha, Json.Parse("2"), true), Center("5"), Quantity("n2"),
+                new("alpha", "Alpha", LawParameterKind.Number, GuideLimits.Alpha, Json.Parse("2"), true), Center("0"), Quantity("n2"),
             ],
         },
         Diffused("gaussian", "Gaussian", "exp(−s²)", "Diffusion from an exhausted source, such as a titanium film driven in.",

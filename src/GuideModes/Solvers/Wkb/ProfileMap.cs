@@ -82,6 +82,18 @@ internal sealed class ProfileMap
     /// <summary>True where n² jumps at the joint.</summary>
     public bool IsStep(int joint) => Math.Abs(LeftOf(joint) - RightOf(joint)) > JumpTolerance * RightOf(joint);
 
+    /// <summary>
+    /// True where the profile's first or last joint is none that a field could feel: no jump, and a kink whose Airy length is longer than
+    /// the whole profile. So ends a tail that was followed until it could not be told from its medium.
+    /// </summary>
+    public bool IsSeamless(int joint)
+    {
+        if (IsStep(joint) || (joint > 0 && joint < Starts.Length)) return false;
+        var slope = joint == 0 ? Starts[0].D1 : Ends[^1].D1;
+        var length = Profile.Extent.Length;
+        return Wavenumber * Wavenumber * Math.Abs(slope) * length * length * length < 1;
+    }
+
     /// <summary>Where n² equals the level on a segment whose ends enclose it.</summary>
     public double Crossing(in Segment segment, double level)
     {

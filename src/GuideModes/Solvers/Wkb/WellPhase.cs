@@ -193,15 +193,15 @@ internal sealed class WellPhase(ProfileMap map, WellFinder finder, PhaseIntegral
     private double End(in Arc arc, double level, int side, double action, PhaseKind kind, ref double shift)
     {
         var turning = side > 0 ? arc.RightTurning : arc.LeftTurning;
+        var joint = side > 0 ? arc.Piece + 1 : arc.Piece;
         if (turning)
         {
-            if (kind == PhaseKind.Classic) return Math.PI / 4;
+            if (kind == PhaseKind.Classic || map.IsSeamless(joint)) return Math.PI / 4;
             var bend = TunnelPhase(arc, level, side, kind);
             shift += Math.Abs(bend);
             return Math.PI / 4 - bend;
         }
 
-        var joint = side > 0 ? arc.Piece + 1 : arc.Piece;
         if (kind == PhaseKind.Classic) return ClassicEnd(arc, level, side, joint);
         var near = SideAt(arc, level, side, action, kind);
         var drive = Ratio(joint, -side) * DecayRate(joint, side, level, kind, 0);
