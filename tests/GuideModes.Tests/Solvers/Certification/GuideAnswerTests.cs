@@ -94,8 +94,12 @@ public class GuideAnswerTests
 
         var fields = answer.Fields([0, 3], [.. x]);
 
-        Assert.Equal(answer.Field(0, [.. x]).Value, fields[0].Value);
-        Assert.Equal(answer.Field(3, [.. x]).Value, fields[1].Value);
+        for (var i = 0; i < x.Length; i++)
+        {
+            Assert.Equal(answer.Field(0, [.. x]).Value[i], fields[0].Value[i]);
+            Assert.Equal(answer.Field(3, [.. x]).Value[i], fields[1].Value[i]);
+        }
+
         Assert.Throws<ArgumentOutOfRangeException>(() => answer.Field(8, [.. x]));
     }
 
