@@ -52,9 +52,8 @@ public class PlanarBenchmarks
     public double BothEnginesFortyOneModesWithFields()
     {
         var answer = GuideAnswer.Solve(_fortyOne);
-        var sum = 0.0;
-        foreach (var mode in answer.Modes) sum += answer.Field(mode.Exact.Order, _coordinates).Value[0];
-        return sum;
+        var fields = answer.Fields([.. answer.Modes.Select(mode => mode.Exact.Order)], _coordinates);
+        return fields.Sum(field => field.Value[0]);
     }
 
     /// <summary>Parsing and checking a guide document.</summary>

@@ -10,7 +10,7 @@ internal sealed class FieldSampler
     private readonly ImmutableArray<double> _x;
     private readonly int[] _step;
     private readonly double[] _factor;
-    private readonly Vector256<double>[] _coefficients;
+    private readonly Vector128<double>[] _coefficients;
     private readonly double[] _f = new double[StepFunctions.Count];
 
     public FieldSampler(StepMesh mesh, ImmutableArray<double> xUm)
@@ -19,8 +19,9 @@ internal sealed class FieldSampler
         _x = xUm;
         _step = new int[xUm.Length];
         _factor = new double[xUm.Length];
-        _coefficients = new Vector256<double>[xUm.Length * StepMesh.Stride];
+        _coefficients = new Vector128<double>[xUm.Length * StepMesh.Stride];
         var series = new StepSeries();
+        var both = new Vector256<double>[StepMesh.Stride];
         int built = -1;
         var graded = false;
         for (var i = 0; i < xUm.Length; i++)
@@ -29,10 +30,10 @@ internal sealed class FieldSampler
             _factor[i] = Factor(step, xUm[i]);
             if (step < 0 || step == mesh.Count) continue;
             if (step != built) (built, graded) = (step, mesh.Series(step, series));
-            var into = _coefficients.AsSpan(i * StepMesh.Stride, StepMesh.Stride);
             var t = (xUm[i] - mesh.Start[step]) / mesh.Length[step];
-            if (graded) series.Coefficients(t, into);
-            else StepSeries.UniformCoefficients(t, into);
+            if (graded) series.Coefficients(t, both);
+            else StepSeries.UniformCoefficients(t, both);
+            for (var m = 0; m < both.Length; m++) _coefficients[i * StepMesh.Stride + m] = Vector128.Create(both[m][0], both[m][2]);
         }
     }
 
@@ -74,10 +75,10 @@ internal sealed class FieldSampler
         var along = _x[i] - Mesh.Start[step];
         var scale = StepFunctions.Evaluate((Mesh.Mean[step] - energy) * along * along, _f);
         var a = _coefficients.AsSpan(i * StepMesh.Stride, StepMesh.Stride);
-        var sum = Vector256<double>.Zero;
-        for (var m = 0; m < a.Length; m++) sum = Vector256.FusedMultiplyAdd(a[m], Vector256.Create(_f[m]), sum);
+        var sum = Vector128<double>.Zero;
+        for (var m = 0; m < a.Length; m++) sum = Vector128.FusedMultiplyAdd(a[m], Vector128.Create(_f[m]), sum);
         var (state, log) = field.At(step);
-        return (sum[0] * state.Value + sum[2] * state.Slope * h) * Math.Exp(log + scale);
+        return Vector128.Dot(sum, Vector128.Create(state.Value, state.Slope * h)) * Math.Exp(log + scale);
     }
 
     /// <summary>The step that holds x: −1 for the cover, one past the last for the substrate.</summary>

@@ -1,3 +1,4 @@
+using System.Buffers;
 using System.Collections.Immutable;
 using System.Runtime.Intrinsics;
 using GuideModes.Profiles;
@@ -10,13 +11,15 @@ namespace GuideModes.Solvers.TransferMatrix;
 /// and group index. TE: n_g = ∫G u²/(n_eff ∫u²). TM: n_g = ∫{n²u² + (G − n²)[(u′ + ρu)² + β²u²]/(k²n²)}/(n_eff ∫u²), ρ = n′/n.
 /// Each step is integrated with the seven Gauss points its matrix was built from, at which the field is exact.
 /// </remarks>
-internal sealed class ModeIntegrals
+internal sealed class ModeIntegrals : IDisposable
 {
     /// <summary>Steps whose field squared is this small beside that at the match add nothing.</summary>
     private const double Negligible = 1e-30;
 
     private readonly Sweep _sweep;
-    private readonly Vector256<double>[] _nodes;
+    private readonly Vector128<double>[] _values;
+    private readonly Vector128<double>[] _slopes;
+    private readonly Vector256<double>[] _both = new Vector256<double>[StepMesh.Stride];
     private readonly double[] _group;
     private readonly double[] _index2;
     private readonly double[] _relativeSlope;
@@ -27,7 +30,8 @@ internal sealed class ModeIntegrals
         _sweep = sweep;
         var mesh = sweep.Mesh;
         var points = mesh.Count * GaussRule.Points;
-        _nodes = new Vector256<double>[points * StepMesh.Stride];
+        _values = ArrayPool<Vector128<double>>.Shared.Rent(points * StepMesh.Stride);
+        _slopes = IsTE ? [] : ArrayPool<Vector128<double>>.Shared.Rent(points * StepMesh.Stride);
         _group = new double[points];
         _index2 = new double[points];
         _relativeSlope = new double[points];
@@ -36,6 +40,15 @@ internal sealed class ModeIntegrals
     }
 
     private StepMesh Mesh => _sweep.Mesh;
+
+    private bool IsTE => Mesh.Problem.Polarization == Polarization.TE;
+
+    /// <summary>Gives the tables back: they are large, and every edit of a guide asks for new ones.</summary>
+    public void Dispose()
+    {
+        ArrayPool<Vector128<double>>.Shared.Return(_values);
+        if (!IsTE) ArrayPool<Vector128<double>>.Shared.Return(_slopes);
+    }
 
     private IndexProfile Profile => Mesh.Problem.Profile;
 
@@ -100,33 +113,34 @@ internal sealed class ModeIntegrals
         var h = Mesh.Length[step];
         var z = (Mesh.Mean[step] - energy) * h * h;
         var part = Profile.Pieces[Mesh.Piece[step]].Region + 1;
-        var start = Vector256.Create(state.Value, state.Value, state.Slope * h, state.Slope * h);
+        var start = Vector128.Create(state.Value, state.Slope * h);
         for (var i = 0; i < GaussRule.Points; i++)
         {
             var t = GaussRule.Nodes[i];
             var point = step * GaussRule.Points + i;
-            var (u, slope) = FieldAt(_nodes.AsSpan(point * StepMesh.Stride, StepMesh.Stride), z * t * t, z * t, start);
+            var grown = Math.Exp(StepFunctions.Evaluate(z * t * t, _f));
+            var u = grown * At(_values, point, start);
             var power = scale * h * GaussRule.Weights[i] * u * u;
-            var group = GroupTerm(_index2[point], _group[point], power, u == 0 ? 0 : slope / h / u + _relativeSlope[point], beta);
+            var logSlope = IsTE || u == 0 ? 0 : grown * (At(_slopes, point, start) + z * t * _f[1] * state.Value) / h / u + _relativeSlope[point];
             var x = Mesh.Start[step] + t * h;
-            sums.Add(part, power, group, x, x * x);
+            sums.Add(part, power, GroupTerm(_index2[point], _group[point], power, logSlope, beta), x, x * x);
         }
     }
 
-    private (double U, double Slope) FieldAt(ReadOnlySpan<Vector256<double>> a, double z, double zt, Vector256<double> start)
+    /// <summary>A solution's value (or slope) at a point, from the table for it and the functions just evaluated.</summary>
+    private double At(Vector128<double>[] table, int point, Vector128<double> start)
     {
-        var f = _f.AsSpan();
-        var scale = Math.Exp(StepFunctions.Evaluate(z, f));
+        var a = table.AsSpan(point * StepMesh.Stride, StepMesh.Stride);
+        var f = _f.AsSpan(0, StepMesh.Stride);
         var sum = a[0] * f[0];
-        for (var m = 1; m < a.Length; m++) sum = Vector256.FusedMultiplyAdd(a[m], Vector256.Create(f[m]), sum);
-        sum = (sum + Vector256.Create(0, zt * f[1], 0, 0)) * start;
-        return ((sum[0] + sum[2]) * scale, (sum[1] + sum[3]) * scale);
+        for (var m = 1; m < a.Length; m++) sum = Vector128.FusedMultiplyAdd(a[m], Vector128.Create(f[m]), sum);
+        return Vector128.Dot(sum, start);
     }
 
     /// <summary>What a stretch with power ∫u² adds to the group integral; <paramref name="logSlope"/> is H′/H for TM.</summary>
     private double GroupTerm(double index2, double group, double power, double logSlope, double beta)
     {
-        if (Mesh.Problem.Polarization == Polarization.TE) return group * power;
+        if (IsTE) return group * power;
         var k = Profile.Wavelength.Wavenumber;
         return power * (index2 + (group - index2) * (logSlope * logSlope + beta * beta) / (k * k * index2));
     }
@@ -156,13 +170,18 @@ internal sealed class ModeIntegrals
         for (var i = 0; i < GaussRule.Points; i++)
         {
             var point = step * GaussRule.Points + i;
-            var into = _nodes.AsSpan(point * StepMesh.Stride, StepMesh.Stride);
-            if (graded) series.Coefficients(GaussRule.Nodes[i], into);
-            else StepSeries.UniformCoefficients(GaussRule.Nodes[i], into);
+            if (graded) series.Coefficients(GaussRule.Nodes[i], _both);
+            else StepSeries.UniformCoefficients(GaussRule.Nodes[i], _both);
+            for (var m = 0; m < StepMesh.Stride; m++)
+            {
+                _values[point * StepMesh.Stride + m] = Vector128.Create(_both[m][0], _both[m][2]);
+                if (!IsTE) _slopes[point * StepMesh.Stride + m] = Vector128.Create(_both[m][1], _both[m][3]);
+            }
+
             var s = piece.Jet(Mesh.Start[step] + GaussRule.Nodes[i] * Mesh.Length[step]);
             _index2[point] = s.Value;
             _group[point] = s.Value - 0.5 * lambda * s.DLambda;
-            _relativeSlope[point] = Mesh.Problem.Polarization == Polarization.TE ? 0 : 0.5 * s.D1 / s.Value;
+            _relativeSlope[point] = IsTE ? 0 : 0.5 * s.D1 / s.Value;
         }
     }
 }

@@ -30,7 +30,7 @@ public sealed record TransferMatrixSolver(double IndexTolerance = 2e-14, int Max
         if (search.Count == 0) return new(SearchOutcome.Complete, [], []);
 
         var fine = new Sweep(new StepMesh(plan.Halved(), problem));
-        var integrals = new ModeIntegrals(coarse);
+        using var integrals = new ModeIntegrals(coarse);
         var found = search.FindAll(cancellation);
         var modes = ImmutableArray.CreateBuilder<GuidedMode>(found.Length);
         for (var m = 0; m < found.Length; m++)
