@@ -118,7 +118,8 @@ internal sealed class ModeIntegrals : IDisposable
         {
             var t = GaussRule.Nodes[i];
             var point = step * GaussRule.Points + i;
-            var grown = Math.Exp(StepFunctions.Evaluate(z * t * t, _f));
+            var log = StepFunctions.Evaluate(z * t * t, _f);
+            var grown = log > 0 ? Math.Exp(log) : 1;
             var u = grown * At(_values, point, start);
             var power = scale * h * GaussRule.Weights[i] * u * u;
             var logSlope = IsTE || u == 0 ? 0 : grown * (At(_slopes, point, start) + z * t * _f[1] * state.Value) / h / u + _relativeSlope[point];

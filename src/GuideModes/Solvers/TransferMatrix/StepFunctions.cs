@@ -21,10 +21,10 @@ internal static class StepFunctions
     public const int Count = Top + 2;
 
     private const double SeriesLimit = 4;
-    private const int SeriesTerms = 12;
+    private const int SeriesTerms = 10;
 
-    private static readonly double[] TopSeries = Series(Top);
-    private static readonly double[] NextSeries = Series(Top - 1);
+    private static readonly double[] TopSeries = Terms(Top);
+    private static readonly double[] NextSeries = Terms(Top - 1);
 
     /// <summary>Fills <paramref name="f"/> with ξ, η₀ … η_Top, all divided by exp of the value returned.</summary>
     [MethodImpl(MethodImplOptions.AggressiveInlining)]
@@ -41,24 +41,36 @@ internal static class StepFunctions
 
     private static void Downward(double z, Span<double> f)
     {
-        ReadOnlySpan<double> top = TopSeries, next = NextSeries;
-        double high = top[SeriesTerms - 1], low = next[SeriesTerms - 1];
-        for (var q = SeriesTerms - 2; q >= 0; q--)
-        {
-            high = Math.FusedMultiplyAdd(high, z, top[q]);
-            low = Math.FusedMultiplyAdd(low, z, next[q]);
-        }
-
+        var high = Series(TopSeries, z);
+        var low = Series(NextSeries, z);
         f = f[..Count];
         f[Top + 1] = high;
         f[Top] = low;
         for (var m = Top; m >= 1; m--)
         {
-            var below = Math.FusedMultiplyAdd(z, high, (2 * m - 1) * low);
+            // Written so that each step waits for one fused operation only.
+            var below = Math.FusedMultiplyAdd(2 * m - 1, low, z * high);
             f[m - 1] = below;
             high = low;
             low = below;
         }
+    }
+
+    /// <summary>Ten terms of a power series, in pairs (Estrin's scheme), so that few operations wait for one another.</summary>
+    private static double Series(double[] terms, double z)
+    {
+        ReadOnlySpan<double> a = terms;
+        a = a[..SeriesTerms];
+        var z2 = z * z;
+        var z4 = z2 * z2;
+        var p01 = Math.FusedMultiplyAdd(a[1], z, a[0]);
+        var p23 = Math.FusedMultiplyAdd(a[3], z, a[2]);
+        var p45 = Math.FusedMultiplyAdd(a[5], z, a[4]);
+        var p67 = Math.FusedMultiplyAdd(a[7], z, a[6]);
+        var p89 = Math.FusedMultiplyAdd(a[9], z, a[8]);
+        var low = Math.FusedMultiplyAdd(p23, z2, p01);
+        var high = Math.FusedMultiplyAdd(p67, z2, p45);
+        return Math.FusedMultiplyAdd(Math.FusedMultiplyAdd(p89, z4, high), z4, low);
     }
 
     private static double Upward(double z, Span<double> f)
@@ -95,7 +107,7 @@ internal static class StepFunctions
     }
 
     /// <summary>η_m(Z) = Σ_q 2^m (q+m)!/(q! (2q+2m+1)!) Z^q: the first term is 1/(2m+1)!!.</summary>
-    private static double[] Series(int m)
+    private static double[] Terms(int m)
     {
         var terms = new double[SeriesTerms];
         var term = 1.0;

@@ -19,7 +19,7 @@ internal sealed class StepMesh
     public const double Radians = 2.0;
 
     /// <summary>The longest step in nepers of decay: what the seven points of the integrals still take in to eleven digits.</summary>
-    public const double Nepers = 2.5;
+    public const double Nepers = 4;
 
     private readonly double[] _legendre;
 
@@ -29,6 +29,7 @@ internal sealed class StepMesh
         Count = plan.Steps.Count;
         Start = new double[Count + 1];
         Length = new double[Count];
+        InverseLength = new double[Count];
         Mean = new double[Count];
         Piece = new int[Count];
         End = new Vector256<double>[Count * Stride];
@@ -46,6 +47,8 @@ internal sealed class StepMesh
     public double[] Start { get; }
 
     public double[] Length { get; }
+
+    public double[] InverseLength { get; }
 
     /// <summary>The mean potential of each step, µm⁻².</summary>
     public double[] Mean { get; }
@@ -86,13 +89,18 @@ internal sealed class StepMesh
             Start[i] = step.Start;
             Start[i + 1] = step.End;
             Length[i] = step.End - step.Start;
+            InverseLength[i] = 1 / Length[i];
             Piece[i] = step.Piece;
             var legendre = _legendre.AsSpan(i * GaussRule.Points, GaussRule.Points);
-            plan.Sample(step, legendre);
-            Mean[i] = legendre[0];
             var end = End.AsSpan(i * Stride, Stride);
-            if (Series(i, series)) series.Coefficients(1, end);
-            else StepSeries.UniformCoefficients(1, end);
+            if (!plan.TryCopy(i, legendre, end))
+            {
+                plan.Sample(step, legendre);
+                if (Series(i, series)) series.Coefficients(1, end);
+                else StepSeries.UniformCoefficients(1, end);
+            }
+
+            Mean[i] = legendre[0];
         }
     }
 

@@ -1,4 +1,7 @@
 
+using System.Runtime.InteropServices;
+using System.Runtime.Intrinsics;
+
 namespace GuideModes.Solvers.TransferMatrix;
 
 /// <summary>Where the steps lie: chosen so that each one's neglected terms stay below a tolerance for every mode at once.</summary>
@@ -21,6 +24,8 @@ internal sealed class StepPlan
 
     private const double LargestVariation = 2;
 
+    private readonly List<double> _legendre = [];
+    private readonly List<Vector256<double>> _ends = [];
     private readonly ModeProblem _problem;
     private readonly double _wavenumber;
 
@@ -89,6 +94,15 @@ internal sealed class StepPlan
         GaussRule.Fit(values, legendre);
     }
 
+    /// <summary>Copies what was worked out for a step when it was laid; false for a halved plan, which has laid none.</summary>
+    public bool TryCopy(int step, Span<double> legendre, Span<Vector256<double>> end)
+    {
+        if (_ends.Count == 0) return false;
+        CollectionsMarshal.AsSpan(_legendre).Slice(step * legendre.Length, legendre.Length).CopyTo(legendre);
+        CollectionsMarshal.AsSpan(_ends).Slice(step * end.Length, end.Length).CopyTo(end);
+        return true;
+    }
+
     /// <summary>Looks at the whole profile at an eighth of a wavelength, so that nothing a mode could feel goes unseen.</summary>
     private void Survey()
     {
@@ -111,6 +125,8 @@ internal sealed class StepPlan
     {
         var extent = _problem.Profile.Pieces[piece].Extent;
         var series = new StepSeries();
+        Span<double> legendre = stackalloc double[GaussRule.Points];
+        Span<Vector256<double>> end = stackalloc Vector256<double>[StepMesh.Stride];
         var at = extent.Start;
         var wanted = extent.Length;
         while (at < extent.End)
@@ -119,7 +135,7 @@ internal sealed class StepPlan
             // Equal shares of what remains, so that no sliver is left for the last step.
             var length = remaining / Math.Ceiling(remaining / wanted * (1 - 1e-12));
             var step = new Step(at, length >= remaining * (1 - 1e-12) ? extent.End : at + length, piece);
-            var factor = Acceptance(step, tolerance, series);
+            var (factor, built) = Acceptance(step, tolerance, series, legendre);
             if (double.IsNaN(factor))
             {
                 IsComplete = false;
@@ -133,6 +149,10 @@ internal sealed class StepPlan
             }
 
             Steps.Add(step);
+            if (!built) Build(series, legendre, length);
+            series.Coefficients(1, end);
+            _legendre.AddRange(legendre);
+            _ends.AddRange(end);
             if (Steps.Count >= MaximumSteps)
             {
                 IsComplete = false;
@@ -144,10 +164,9 @@ internal sealed class StepPlan
         }
     }
 
-    /// <summary>By what factor the step's length may be multiplied; below 1 it is refused.</summary>
-    private double Acceptance(Step step, double tolerance, StepSeries series)
+    /// <summary>By what factor the step's length may be multiplied, and whether the series was built; below 1 the step is refused.</summary>
+    private (double Factor, bool Built) Acceptance(Step step, double tolerance, StepSeries series, Span<double> legendre)
     {
-        Span<double> legendre = stackalloc double[GaussRule.Points];
         Sample(step, legendre);
         var h = step.End - step.Start;
         var variation = 0.0;
@@ -155,18 +174,23 @@ internal sealed class StepPlan
         var phase = h * Math.Sqrt(Math.Max(variation - legendre[0], 0));
         var decay = h * Math.Sqrt(Math.Max(legendre[0] + variation - LowestPotential, 0));
         var longest = 1 / Math.Max(Math.Max(phase / StepMesh.Radians, decay / StepMesh.Nepers), 1e-9);
-        if (longest < 1 || variation == 0) return longest * (1 - 1e-9);
+        if (longest < 1 || variation == 0) return (longest * (1 - 1e-9), false);
         var calm = Math.Sqrt(LargestVariation / (h * h * variation));
-        if (calm < 1) return 0.9 * calm;
+        if (calm < 1) return (0.9 * calm, false);
 
-        Span<double> monomials = stackalloc double[GaussRule.Points];
-        GaussRule.Monomials(legendre, monomials);
-        for (var j = 0; j < monomials.Length; j++) monomials[j] *= h * h;
-        series.Build(monomials);
+        Build(series, legendre, h);
         var tail = (Math.Abs(legendre[GaussRule.Degree]) + Math.Abs(legendre[GaussRule.Degree - 1])) * Coupling(Math.Max(phase, decay));
         // A change of the potential counts by the share of the mode it meets; a step far shorter than a wave meets little of it.
         var error = (tail + series.Remainder / (h * h)) * Math.Min(1, h * _wavenumber / ShortStep);
-        return Math.Min(longest, 0.9 * Math.Pow(tolerance / Math.Max(error, 1e-300), 1.0 / 9));
+        return (Math.Min(longest, 0.9 * Math.Pow(tolerance / Math.Max(error, 1e-300), 1.0 / 9)), true);
+    }
+
+    private static void Build(StepSeries series, ReadOnlySpan<double> legendre, double length)
+    {
+        Span<double> monomials = stackalloc double[GaussRule.Points];
+        GaussRule.Monomials(legendre, monomials);
+        for (var j = 0; j < monomials.Length; j++) monomials[j] *= length * length;
+        series.Build(monomials);
     }
 
     /// <summary>How much of u² a degree-6 wiggle can meet: (κh)⁶/13!!, and not below a millionth, for the fit's own sake.</summary>

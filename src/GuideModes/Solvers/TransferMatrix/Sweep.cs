@@ -81,7 +81,7 @@ internal sealed class Sweep(StepMesh mesh)
         // ∂/∂E = −h² ∂/∂Z, and slopes are per h: ∫u² dx = (u′∂u − u∂u′) = −h(s·du − u·ds).
         var part = h * (u * ds - s * du);
         var norm = log > 0 ? from.Norm * Math.Exp(-2 * log) + part : from.Norm + part;
-        return new FieldState(u, s / h, norm, from.Log + log).Rescaled();
+        return new FieldState(u, s * Mesh.InverseLength[step], norm, from.Log + log).Rescaled();
     }
 
     private FieldState Backward(int step, double energy, FieldState from)
@@ -95,7 +95,7 @@ internal sealed class Sweep(StepMesh mesh)
         // Start state u·e^log, its derivative carried forward du·e^2log; divided by e^2log like the norm's scale.
         var part = h * (u1 * ds - s1 * du);
         var norm = log > 0 ? from.Norm * Math.Exp(-2 * log) + part : from.Norm + part;
-        return new FieldState(u, s / h, norm, from.Log + log).Rescaled();
+        return new FieldState(u, s * Mesh.InverseLength[step], norm, from.Log + log).Rescaled();
     }
 
     /// <summary>A step's matrix in units of its length, lanes (11, 21, 12, 22), its derivative in Z, and the logarithm both must be scaled by.</summary>
@@ -106,16 +106,21 @@ internal sealed class Sweep(StepMesh mesh)
         var f = _f.AsSpan();
         var log = StepFunctions.Evaluate(z, f);
         var a = Mesh.End.AsSpan(step * StepMesh.Stride, StepMesh.Stride);
-        var t = a[0] * f[0];
-        var dt = a[0] * f[1];
-        for (var m = 1; m < StepMesh.Stride; m++)
+        // Even and odd terms apart, so that few operations wait for one another.
+        var t = Vector256.FusedMultiplyAdd(a[0], Vector256.Create(f[0]), Vector256.Create(0, z * f[1], 0, 0));
+        var dt = Vector256.FusedMultiplyAdd(a[0], Vector256.Create(f[1]), Vector256.Create(0, 2 * f[1] + z * f[2], 0, 0));
+        var tOdd = a[1] * f[1];
+        var dtOdd = a[1] * f[2];
+        for (var m = 2; m < a.Length - 1; m += 2)
         {
             t = Vector256.FusedMultiplyAdd(a[m], Vector256.Create(f[m]), t);
             dt = Vector256.FusedMultiplyAdd(a[m], Vector256.Create(f[m + 1]), dt);
+            tOdd = Vector256.FusedMultiplyAdd(a[m + 1], Vector256.Create(f[m + 1]), tOdd);
+            dtOdd = Vector256.FusedMultiplyAdd(a[m + 1], Vector256.Create(f[m + 2]), dtOdd);
         }
 
-        t += Vector256.Create(0, z * f[1], 0, 0);
-        dt = 0.5 * dt + Vector256.Create(0, f[1] + 0.5 * z * f[2], 0, 0);
+        t += tOdd;
+        dt = 0.5 * (dt + dtOdd);
         return (t, dt, log);
     }
 }

@@ -50,7 +50,7 @@ public sealed class StepMatrixTests
     [InlineData(Polarization.TM)]
     public void Error_StepsHalved_FallsByEightOrdersOrMore(Polarization polarization)
     {
-        var problem = Problem(Planar(1, polarization, 1.5, 1.5, Region(null, Diffused("sech2", 1.5, 0.3, 0.6, 14, "n2"))));
+        var problem = Problem(Planar(1, polarization, 1.5, 1.5, Region(null, Diffused("sech2", 1.5, 0.3, 0.5, 14, "n2"))));
         var plan = StepPlan.For(problem, 1e3, default);
         var exact = new ModeSearch(new Sweep(new StepMesh(StepPlan.For(problem, 1e-15, default), problem)), plan.LowestPotential).FindAll(default)[0].Energy;
         var errors = new List<double>();
