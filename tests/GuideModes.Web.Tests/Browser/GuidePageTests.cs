@@ -34,6 +34,20 @@ public sealed class GuidePageTests(BrowserHost host)
         Assert.Empty(complaints);
     }
 
+    /// <remarks>A click that comes while the circuit starts once left the address of the guide under the sight of the gallery.</remarks>
+    [BrowserFact]
+    public async Task Gallery_CardClickedBeforeTheCircuitIsUp_OpensTheGuide()
+    {
+        for (var i = 0; i < 6; i++)
+        {
+            var page = await host.OpenAsync("about:blank");
+            await page.GotoAsync(host.Address.ToString(), new() { WaitUntil = WaitUntilState.Commit });
+            await page.Locator(".gallery a").Nth(i).ClickAsync();
+            await Drawn(page);
+            await page.CloseAsync();
+        }
+    }
+
     [BrowserFact]
     public async Task Error_CommaForPoint_StandsAtItsFieldAndKeepsTheAnswer()
     {
