@@ -1,3 +1,4 @@
+using System.Runtime.Intrinsics;
 using MathNet.Numerics.Integration;
 
 namespace GuideModes.Solvers.TransferMatrix;
@@ -11,6 +12,9 @@ internal static class GaussRule
     public const int Degree = Points - 1;
 
     public static readonly double[] Nodes = new double[Points];
+
+    /// <summary>The nodes as two vectors, the last place empty.</summary>
+    public static readonly (Vector256<double> Low, Vector256<double> High) PaddedNodes;
 
     public static readonly double[] Weights = new double[Points];
 
@@ -29,6 +33,7 @@ internal static class GaussRule
             Weights[i] = rule.GetWeight(i);
         }
 
+        PaddedNodes = (Vector256.Create<double>(Nodes), Vector256.Create(Nodes[4], Nodes[5], Nodes[6], 0));
         FillLegendre();
     }
 

@@ -168,21 +168,28 @@ internal sealed class ModeIntegrals : IDisposable
         var piece = Profile.Pieces[Mesh.Piece[step]];
         var lambda = Profile.Wavelength.Micrometres;
         var graded = Mesh.Series(step, series);
+        if (graded && IsTE)
+            series.ValueCoefficientsAtNodes(_values.AsSpan(step * GaussRule.Points * StepMesh.Stride, GaussRule.Points * StepMesh.Stride));
         for (var i = 0; i < GaussRule.Points; i++)
         {
             var point = step * GaussRule.Points + i;
-            if (graded) series.Coefficients(GaussRule.Nodes[i], _both);
-            else StepSeries.UniformCoefficients(GaussRule.Nodes[i], _both);
-            for (var m = 0; m < StepMesh.Stride; m++)
-            {
-                _values[point * StepMesh.Stride + m] = Vector128.Create(_both[m][0], _both[m][2]);
-                if (!IsTE) _slopes[point * StepMesh.Stride + m] = Vector128.Create(_both[m][1], _both[m][3]);
-            }
-
+            if (!graded || !IsTE) FillPoint(point, GaussRule.Nodes[i], graded ? series : null);
             var s = piece.Jet(Mesh.Start[step] + GaussRule.Nodes[i] * Mesh.Length[step]);
             _index2[point] = s.Value;
             _group[point] = s.Value - 0.5 * lambda * s.DLambda;
             _relativeSlope[point] = IsTE ? 0 : 0.5 * s.D1 / s.Value;
+        }
+    }
+
+    /// <summary>Fills the tables at one point; without a series the step is uniform.</summary>
+    private void FillPoint(int point, double t, StepSeries? series)
+    {
+        if (series is null) StepSeries.UniformCoefficients(t, _both);
+        else series.Coefficients(t, _both);
+        for (var m = 0; m < StepMesh.Stride; m++)
+        {
+            _values[point * StepMesh.Stride + m] = Vector128.Create(_both[m][0], _both[m][2]);
+            if (!IsTE) _slopes[point * StepMesh.Stride + m] = Vector128.Create(_both[m][1], _both[m][3]);
         }
     }
 }

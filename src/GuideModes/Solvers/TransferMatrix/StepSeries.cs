@@ -21,10 +21,19 @@ internal sealed class StepSeries
 
     private const int Terms = Last + 1;
     private const int Degree = 16;
-    private const int Stride = Degree + 1;
+
+    /// <summary>Zeros before each row's first power, so that products can be formed four at a time; some follow it too.</summary>
+    private const int Pad = 8;
+
+    private const int Stride = Pad + Degree + 1 + 7;
 
     /// <summary>Powers with smaller coefficients are dropped: the sums they enter are of order 1.</summary>
     private const double Negligible = 1e-20;
+
+    private const int Lanes = 4;
+
+    /// <summary>½, ¼, ⅙ …: place j holds 1/(2j).</summary>
+    private static readonly double[] Halves = [.. Enumerable.Range(0, Degree + 1 + Terms).Select(j => 0.5 / j)];
 
     private static readonly double LastWeight = 1 / OddFactorial(2 * Last + 1);
 
@@ -41,9 +50,9 @@ internal sealed class StepSeries
     {
         Array.Clear(_first);
         Array.Clear(_second);
-        for (var j = 0; j < d.Length; j++) _first[j + 1] = 0.5 * d[j] / (j + 1);
+        for (var j = 0; j < d.Length; j++) _first[Pad + j + 1] = 0.5 * d[j] / (j + 1);
         _firstDegree[0] = d.Length;
-        _second[0] = 1;
+        _second[Pad] = 1;
         _secondDegree[0] = 0;
         Recur(_first, _firstDegree, d);
         Recur(_second, _secondDegree, d);
@@ -72,6 +81,46 @@ internal sealed class StepSeries
         into[0] = Vector256.Create(1, nextU, 0, nextV);
     }
 
+    /// <summary>
+    /// The coefficients of the values alone, lanes u₁, u₂, at the points of <see cref="GaussRule"/>: one point's after the other's.
+    /// </summary>
+    public void ValueCoefficientsAtNodes(Span<Vector128<double>> into)
+    {
+        for (var m = 0; m <= Last; m++)
+        {
+            var (u, v) = (AtNodes(_first, _firstDegree[m], m), AtNodes(_second, _secondDegree[m], m));
+            for (var i = 0; i < GaussRule.Points; i++)
+            {
+                into[i * (Terms + 1) + m + 1] = i < Lanes
+                    ? Vector128.Create(u.Low[i], v.Low[i])
+                    : Vector128.Create(u.High[i - Lanes], v.High[i - Lanes]);
+            }
+        }
+
+        for (var i = 0; i < GaussRule.Points; i++) into[i * (Terms + 1)] = Vector128.Create(1.0, 0);
+    }
+
+    /// <summary>S_m(t)·t^{2m+1} at all Gauss points at once.</summary>
+    private static (Vector256<double> Low, Vector256<double> High) AtNodes(double[] s, int degree, int m)
+    {
+        var (t, t2) = (GaussRule.PaddedNodes.Low, GaussRule.PaddedNodes.High);
+        var (low, high) = (Vector256<double>.Zero, Vector256<double>.Zero);
+        for (var j = degree; j >= 0; j--)
+        {
+            var c = Vector256.Create(s[m * Stride + Pad + j]);
+            low = Vector256.FusedMultiplyAdd(low, t, c);
+            high = Vector256.FusedMultiplyAdd(high, t2, c);
+        }
+
+        for (var j = 0; j < 2 * m + 1; j++)
+        {
+            low *= t;
+            high *= t2;
+        }
+
+        return (low, high);
+    }
+
     /// <summary>The coefficients for a step of constant potential.</summary>
     public static void UniformCoefficients(double t, Span<Vector256<double>> into)
     {
@@ -82,23 +131,26 @@ internal sealed class StepSeries
 
     private static void Recur(double[] s, int[] degrees, ReadOnlySpan<double> d)
     {
+        Span<Vector256<double>> factors = stackalloc Vector256<double>[GaussRule.Points];
+        for (var k = 0; k < factors.Length; k++) factors[k] = Vector256.Create(d[k]);
         Span<double> right = stackalloc double[Stride];
         for (var m = 0; m < Last; m++)
         {
             var row = s.AsSpan(m * Stride, Stride);
+            var next = s.AsSpan((m + 1) * Stride + Pad, Stride - Pad);
             var degree = degrees[m];
-            var top = Math.Min(degree + d.Length - 1, Degree);
-            right[..(top + 1)].Clear();
-            for (var i = 0; i <= degree; i++)
+            var top = Math.Min(degree + factors.Length - 1, Degree);
+            for (var j = 0; j <= top; j += Lanes)
             {
-                var factor = row[i];
-                var count = Math.Min(d.Length, top - i + 1);
-                for (var j = 0; j < count; j++) right[i + j] += factor * d[j];
+                // Four powers of D·S_m at a time; below its first power a row is padded with zeros.
+                var sum = factors[0] * Vector256.Create<double>(row.Slice(Pad + j, Lanes));
+                for (var k = 1; k < factors.Length; k++)
+                    sum = Vector256.FusedMultiplyAdd(factors[k], Vector256.Create<double>(row.Slice(Pad + j - k, Lanes)), sum);
+                sum.CopyTo(right[j..]);
             }
 
-            for (var j = 0; j + 2 <= degree; j++) right[j] -= (j + 2) * (j + 1) * row[j + 2];
-            var next = s.AsSpan((m + 1) * Stride, Stride);
-            for (var j = 0; j <= top; j++) next[j] = 0.5 * right[j] / (j + m + 1);
+            for (var j = 0; j + 2 <= degree; j++) right[j] -= (j + 2) * (j + 1) * row[Pad + j + 2];
+            for (var j = 0; j <= top; j++) next[j] = right[j] * Halves[j + m + 1];
             while (top > 0 && Math.Abs(next[top]) < Negligible) top--;
             degrees[m + 1] = top;
         }
@@ -110,7 +162,7 @@ internal sealed class StepSeries
         for (var j = degree; j >= 0; j--)
         {
             slope = slope * t + sum;
-            sum = sum * t + s[m * Stride + j];
+            sum = sum * t + s[m * Stride + Pad + j];
         }
 
         return (sum, slope);
