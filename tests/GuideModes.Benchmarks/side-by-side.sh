@@ -4,7 +4,7 @@
 #   tests/GuideModes.Benchmarks/side-by-side.sh [baseline method ...]
 #
 # The baseline methods are sem_dense (the default, the fastest of them), sem_eigsh, fd2 and fd2_richardson; the last
-# two take minutes. The baseline runs before and after our benchmarks, and its better time counts.
+# two take minutes. The baseline runs before and after our benchmarks: a virtual machine changes its pace.
 set -euo pipefail
 
 here=$(cd "$(dirname "$0")" && pwd)
