@@ -24,6 +24,10 @@ public class GuideAnswerTests
             Assert.NotEqual(Trust.Disagree, mode.Trust);
             Assert.NotNull(mode.Wkb);
             Assert.True(mode.Wkb.EffectiveIndex.Covers(expected.NEff), $"{id} {mode.Label}: {mode.Reason}");
+            if (expected.Wkb1 is { } first)
+                Deviation.Record($"WKB first order of the reference guides, {id} {mode.Label}", "modes.json", first, mode.Wkb.FirstOrderIndex!.Value, 1e-9);
+            if (expected.Wkb3 is { } second)
+                Deviation.Record($"WKB second order of the reference guides, {id} {mode.Label}", "modes.json", second, mode.Wkb.SecondOrderIndex!.Value, 1e-8);
         }
     }
 
