@@ -1,5 +1,6 @@
 using System.Collections.Immutable;
 using System.Reflection;
+using GuideModes.Solvers;
 using GuideModes.Solvers.Certification;
 using GuideModes.Solvers.Wkb;
 using GuideModes.Web.Components.Shared;
@@ -24,18 +25,12 @@ public static class AnswerBuilder
     public static ModesAnswer Build(GuideAnswer answer, FieldRequest? fields, CancellationToken cancellation)
     {
         var grid = fields is null ? default : fields.XUm.IsDefault ? Grid(answer, fields.Orders) : fields.XUm;
-        var modes = ImmutableArray.CreateBuilder<ModeAnswer>(answer.Modes.Length);
-        foreach (var mode in answer.Modes)
-        {
-            cancellation.ThrowIfCancellationRequested();
-            var isAsked = fields is not null && (fields.Orders?.Contains(mode.Exact.Order) ?? true);
-            modes.Add(Build(mode, isAsked ? Field(answer, mode, grid) : null));
-        }
-
+        ImmutableArray<int> asked = fields is null ? [] : [.. Asked(answer, fields.Orders).Select(mode => mode.Exact.Order)];
+        var sampled = asked.Zip(answer.Fields(asked, grid, cancellation)).ToDictionary(pair => pair.First, pair => Field(answer, pair.Second));
         return new(
             answer.Modes.Length,
             Finite(answer.WkbModeNumber),
-            modes.MoveToImmutable(),
+            [.. answer.Modes.Select(mode => Build(mode, sampled.GetValueOrDefault(mode.Exact.Order)))],
             answer.Remarks,
             Engine,
             fields is null ? null : Profile(answer));
@@ -43,7 +38,10 @@ public static class AnswerBuilder
 
     /// <summary>Round coordinates that hold the guide and the tails of the modes asked for.</summary>
     public static ImmutableArray<double> Grid(GuideAnswer answer, IReadOnlyCollection<int>? orders) =>
-        FieldGrid.Over(ViewRange.ForFields(answer, answer.Modes.Where(mode => orders?.Contains(mode.Exact.Order) ?? true)), FieldPoints);
+        FieldGrid.Over(ViewRange.ForFields(answer, Asked(answer, orders)), FieldPoints);
+
+    private static IEnumerable<CertifiedMode> Asked(GuideAnswer answer, IReadOnlyCollection<int>? orders) =>
+        answer.Modes.Where(mode => orders?.Contains(mode.Exact.Order) ?? true);
 
     private static ModeAnswer Build(CertifiedMode mode, FieldAnswer? field)
     {
@@ -82,11 +80,8 @@ public static class AnswerBuilder
         Finite(wkb.BarrierTransparency),
         wkb.IsNearDegenerate);
 
-    private static FieldAnswer Field(GuideAnswer answer, CertifiedMode mode, ImmutableArray<double> grid)
-    {
-        var field = answer.Field(mode.Exact.Order, grid);
-        return new(answer.Guide.Polarization == Polarization.TE ? "E" : "H", field.XUm, field.Value);
-    }
+    private static FieldAnswer Field(GuideAnswer answer, SampledField field) =>
+        new(answer.Guide.Polarization == Polarization.TE ? "E" : "H", field.XUm, field.Value);
 
     private static ProfileAnswer Profile(GuideAnswer answer)
     {

@@ -61,7 +61,8 @@ public sealed class GuideAnswer
     public SampledField Field(int order, ImmutableArray<double> xUm) => _exact.Field(order, xUm);
 
     /// <summary>The exact fields of several modes at the same coordinates: much cheaper than one by one.</summary>
-    public ImmutableArray<SampledField> Fields(ImmutableArray<int> orders, ImmutableArray<double> xUm) => _exact.Fields(orders, xUm);
+    public ImmutableArray<SampledField> Fields(ImmutableArray<int> orders, ImmutableArray<double> xUm, CancellationToken cancellation = default) =>
+        _exact.Fields(orders, xUm, cancellation);
 
     /// <summary>The asymptotic field of mode m, µm^−½; null where the WKB engine finds no such mode.</summary>
     public SampledField? WkbField(int order, ImmutableArray<double> xUm) =>

@@ -166,7 +166,6 @@ internal sealed class ModeIntegrals : IDisposable
     private void Prepare(int step, StepSeries series)
     {
         var piece = Profile.Pieces[Mesh.Piece[step]];
-        var lambda = Profile.Wavelength.Micrometres;
         var graded = Mesh.Series(step, series);
         if (graded && IsTE)
             series.ValueCoefficientsAtNodes(_values.AsSpan(step * GaussRule.Points * StepMesh.Stride, GaussRule.Points * StepMesh.Stride));
@@ -175,8 +174,7 @@ internal sealed class ModeIntegrals : IDisposable
             var point = step * GaussRule.Points + i;
             if (!graded || !IsTE) FillPoint(point, GaussRule.Nodes[i], graded ? series : null);
             var s = piece.Jet(Mesh.Start[step] + GaussRule.Nodes[i] * Mesh.Length[step]);
-            _index2[point] = s.Value;
-            _group[point] = s.Value - 0.5 * lambda * s.DLambda;
+            (_index2[point], _group[point]) = Medium.From(s, Profile.Wavelength);
             _relativeSlope[point] = IsTE ? 0 : 0.5 * s.D1 / s.Value;
         }
     }

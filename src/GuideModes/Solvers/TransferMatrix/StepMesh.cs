@@ -72,11 +72,7 @@ internal sealed class StepMesh
     public bool Series(int step, StepSeries series)
     {
         if (Problem.Profile.Pieces[Piece[step]].IsUniform) return false;
-        Span<double> monomials = stackalloc double[GaussRule.Points];
-        GaussRule.Monomials(_legendre.AsSpan(step * GaussRule.Points, GaussRule.Points), monomials);
-        var scale = Length[step] * Length[step];
-        for (var j = 0; j < monomials.Length; j++) monomials[j] *= scale;
-        series.Build(monomials);
+        series.BuildFor(_legendre.AsSpan(step * GaussRule.Points, GaussRule.Points), Length[step]);
         return true;
     }
 

@@ -1,4 +1,3 @@
-
 using System.Runtime.InteropServices;
 using System.Runtime.Intrinsics;
 
@@ -149,7 +148,7 @@ internal sealed class StepPlan
             }
 
             Steps.Add(step);
-            if (!built) Build(series, legendre, length);
+            if (!built) series.BuildFor(legendre, length);
             series.Coefficients(1, end);
             _legendre.AddRange(legendre);
             _ends.AddRange(end);
@@ -178,19 +177,11 @@ internal sealed class StepPlan
         var calm = Math.Sqrt(LargestVariation / (h * h * variation));
         if (calm < 1) return (0.9 * calm, false);
 
-        Build(series, legendre, h);
+        series.BuildFor(legendre, h);
         var tail = (Math.Abs(legendre[GaussRule.Degree]) + Math.Abs(legendre[GaussRule.Degree - 1])) * Coupling(Math.Max(phase, decay));
         // A change of the potential counts by the share of the mode it meets; a step far shorter than a wave meets little of it.
         var error = (tail + series.Remainder / (h * h)) * Math.Min(1, h * _wavenumber / ShortStep);
         return (Math.Min(longest, 0.9 * Math.Pow(tolerance / Math.Max(error, 1e-300), 1.0 / 9)), true);
-    }
-
-    private static void Build(StepSeries series, ReadOnlySpan<double> legendre, double length)
-    {
-        Span<double> monomials = stackalloc double[GaussRule.Points];
-        GaussRule.Monomials(legendre, monomials);
-        for (var j = 0; j < monomials.Length; j++) monomials[j] *= length * length;
-        series.Build(monomials);
     }
 
     /// <summary>How much of u² a degree-6 wiggle can meet: (κh)⁶/13!!, and not below a millionth, for the fit's own sake.</summary>

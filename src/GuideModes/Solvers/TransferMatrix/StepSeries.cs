@@ -45,6 +45,15 @@ internal sealed class StepSeries
     /// <summary>A bound, in units of the potential times h², on what the last kept term contributes.</summary>
     public double Remainder { get; private set; }
 
+    /// <summary>Works out the S_m for a step's potential, given by its Legendre coefficients, less its mean.</summary>
+    public void BuildFor(ReadOnlySpan<double> legendre, double length)
+    {
+        Span<double> monomials = stackalloc double[GaussRule.Points];
+        GaussRule.Monomials(legendre, monomials);
+        for (var j = 0; j < monomials.Length; j++) monomials[j] *= length * length;
+        Build(monomials);
+    }
+
     /// <summary>Works out the S_m for D = Σ d_j t^j, already multiplied by h².</summary>
     public void Build(ReadOnlySpan<double> d)
     {

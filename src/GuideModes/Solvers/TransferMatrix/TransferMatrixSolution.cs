@@ -35,8 +35,10 @@ public sealed class TransferMatrixSolution
     /// <summary>The fields of several modes at the same coordinates: much cheaper than one by one.</summary>
     /// <param name="orders">Mode numbers, from 0.</param>
     /// <param name="xUm">Coordinates, µm.</param>
+    /// <param name="cancellation">Looked at between modes.</param>
     /// <exception cref="ArgumentOutOfRangeException">There is no such mode.</exception>
-    public ImmutableArray<SampledField> Fields(ImmutableArray<int> orders, ImmutableArray<double> xUm)
+    /// <exception cref="OperationCanceledException">The caller lost interest.</exception>
+    public ImmutableArray<SampledField> Fields(ImmutableArray<int> orders, ImmutableArray<double> xUm, CancellationToken cancellation = default)
     {
         foreach (var order in orders)
         {
@@ -46,6 +48,13 @@ public sealed class TransferMatrixSolution
 
         if (_mesh is null || orders.IsEmpty) return [];
         var sampler = new FieldSampler(_mesh, xUm);
-        return [.. orders.Select(order => sampler.Sample(_found[order]))];
+        var fields = ImmutableArray.CreateBuilder<SampledField>(orders.Length);
+        foreach (var order in orders)
+        {
+            cancellation.ThrowIfCancellationRequested();
+            fields.Add(sampler.Sample(_found[order]));
+        }
+
+        return fields.MoveToImmutable();
     }
 }

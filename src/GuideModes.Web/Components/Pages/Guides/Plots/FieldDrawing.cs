@@ -14,9 +14,10 @@ internal static class FieldDrawing
         var grid = FieldGrid.Over(view, Points);
         var packet = new PlotPacket();
         double low = 0, high = 0;
+        var fields = answer.Fields([.. chosen], grid);
         for (var slot = 0; slot < chosen.Count; slot++)
         {
-            var field = answer.Field(chosen[slot], grid);
+            var field = fields[slot];
             double[] values = [.. field.Value.Select(value => intensity ? value * value : value)];
             (low, high) = (Math.Min(low, values.Min()), Math.Max(high, values.Max()));
             packet.Add("field", answer.Modes[chosen[slot]].Label, slot, field.XUm, values);

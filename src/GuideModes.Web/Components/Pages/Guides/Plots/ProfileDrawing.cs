@@ -97,9 +97,8 @@ internal static class ProfileDrawing
         var grid = FieldGrid.Over(view, FieldPoints);
         var height = Height(answer, chosen, span);
         var highest = 0.0;
-        foreach (var order in chosen)
+        foreach (var (order, field) in chosen.Zip(answer.Fields([.. chosen], grid)))
         {
-            var field = answer.Field(order, grid);
             var largest = field.Value.Max(Math.Abs);
             var level = answer.Modes[order].Exact.EffectiveIndex.Value;
             double[] drawn = [.. field.Value.Select(value => level + height * value / largest)];
